@@ -1,0 +1,5 @@
+/** Synthetic sessions with known truth. May use storage and recording. */
+@NullMarked
+package nightjar.demo;
+
+import org.jspecify.annotations.NullMarked;
