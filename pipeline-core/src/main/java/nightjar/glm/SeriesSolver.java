@@ -66,18 +66,19 @@ final class SeriesSolver {
 
   /** Fits series {@code v} of the block as series {@code to} of the result. */
   void solve(VoxelMoments y, int v, double laggedCorrelation, GlmFit fit, int to) {
-    double ordinary = ordinaryResidual(y, v);
-    int df = model.residualDegreesOfFreedom();
-    if (Double.isNaN(ordinary)) {
-      fit.leaveOut(to);
-      return;
-    }
     // As used and as written: maps hold float32.
     double rho =
         model.firstOrder().isPresent()
             ? (float) model.firstOrder().get().expected().invert(laggedCorrelation)
             : 0;
-    double rss = generalised(y, v, rho);
+    solveAt(rho, y, v, fit, to);
+  }
+
+  /** The same with a given AR(1) coefficient. */
+  void solveAt(double rho, VoxelMoments y, int v, GlmFit fit, int to) {
+    double ordinary = ordinaryResidual(y, v);
+    int df = model.residualDegreesOfFreedom();
+    double rss = Double.isNaN(ordinary) ? Double.NaN : generalised(y, v, rho);
     if (!(rss > 0)) {
       fit.leaveOut(to);
       return;

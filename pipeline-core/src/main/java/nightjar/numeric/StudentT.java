@@ -19,9 +19,8 @@ public final class StudentT {
     if (Double.isInfinite(t2)) {
       return 0;
     }
-    // The argument nearer to 0 keeps its digits: df/(df+t^2) for large t, its complement for small
-    // t.
-    return t2 > df
+    // Near the centre the complement keeps its digits, in the tails the tail itself.
+    return t2 > 1
         ? Beta.regularizedBeta(df / (df + t2), 0.5 * df, 0.5)
         : 1 - Beta.regularizedBeta(t2 / (df + t2), 0.5, 0.5 * df);
   }
