@@ -27,6 +27,11 @@ public final class GlmFit {
     p = new double[contrasts][series];
   }
 
+  /** The fit of no series. */
+  public static GlmFit ofNothing() {
+    return new GlmFit(0, 0, 0);
+  }
+
   /** Marks series {@code v} as without a fit. */
   void leaveOut(int v) {
     autocorrelation[v] = Double.NaN;
