@@ -65,6 +65,16 @@ public final class RegionFits {
     return new RegionFits(model, series, designs, fit);
   }
 
+  /** Number of regions that have voxels, each with a fit. */
+  public int size() {
+    return series.size();
+  }
+
+  /** Name of region {@code r} of those that have voxels. */
+  public String name(int r) {
+    return series.region(r).name();
+  }
+
   /** The region's series, not modified. */
   RegionSeries series() {
     return series;
