@@ -62,7 +62,7 @@ final class ClassicHeader {
     this.bytes = bytes;
     int magic = bytes.int32();
     int version = magic & 0xff;
-    if (magic >>> 8 != 0x434446 || version != 1 && version != 2) {
+    if (magic >>> 8 != 0x434446 || (version != 1 && version != 2)) {
       throw bytes.damaged("version " + version + " of the classic format is unknown");
     }
     wideOffsets = version == 2;

@@ -156,7 +156,7 @@ final class Packing {
     return switch (variable.type()) {
       case SHORT -> isUnsigned ? 65535 : -32767;
       case INT -> isUnsigned ? 4294967295.0 : -2147483647;
-      case LONG -> -9223372036854775806.0;
+      case LONG -> -0x1p63;
       case FLOAT, DOUBLE -> 9.9692099683868690e36;
       default -> Double.NaN;
     };
