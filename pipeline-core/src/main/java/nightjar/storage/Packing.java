@@ -7,15 +7,13 @@ import org.jspecify.annotations.Nullable;
  * From stored to true values: {@code true = stored * scale_factor + add_offset}, missing ones NaN
  * (CF Conventions 1.11, sections 2.5.1 and 8.1; NetCDF User's Guide, appendix A, for the default
  * fill values, which mark what was never written, and for bounds of packed variables given in true
- * values). Immutable.
+ * values). A value beyond what float32 can hold is no measurement and counts as missing. Immutable.
  */
 final class Packing {
   private static final int PIECE_VALUES = 4096;
 
   /** Values within stay. */
   private record Bounds(double low, double high) {
-    static final Bounds NONE = new Bounds(Double.NEGATIVE_INFINITY, Double.POSITIVE_INFINITY);
-
     boolean exclude(double x) {
       return x < low || x > high;
     }
@@ -107,11 +105,10 @@ final class Packing {
   }
 
   private static void keepWithin(Bounds bounds, float[] a, int at, int count) {
-    if (bounds.equals(Bounds.NONE)) {
-      return;
-    }
+    float low = (float) bounds.low();
+    float high = (float) bounds.high();
     for (int i = at; i < at + count; i++) {
-      a[i] = bounds.exclude(a[i]) ? Float.NaN : a[i];
+      a[i] = a[i] >= low && a[i] <= high ? a[i] : Float.NaN;
     }
   }
 
@@ -181,22 +178,24 @@ final class Packing {
   }
 
   private Bounds bounds(boolean inTrueValues) {
-    double low = Double.NEGATIVE_INFINITY;
-    double high = Double.POSITIVE_INFINITY;
+    double low = -Float.MAX_VALUE;
+    double high = Float.MAX_VALUE;
     double[] range = bound("valid_range", inTrueValues);
     if (range.length == 2) {
-      return new Bounds(range[0], range[1]);
+      return new Bounds(Math.max(low, range[0]), Math.min(high, range[1]));
     }
     double[] least = bound("valid_min", inTrueValues);
     double[] most = bound("valid_max", inTrueValues);
-    return new Bounds(least.length == 1 ? least[0] : low, most.length == 1 ? most[0] : high);
+    return new Bounds(
+        least.length == 1 ? Math.max(low, least[0]) : low,
+        most.length == 1 ? Math.min(high, most[0]) : high);
   }
 
   private double[] bound(String name, boolean inTrueValues) {
     Attribute a = variable.attribute(name);
     return a == null || isInTrueValues(a) != inTrueValues
         ? new double[0]
-        : DoubleStream.of(a.numbers()).map(this::asStored).toArray();
+        : DoubleStream.of(a.numbers()).map(this::asStored).filter(x -> !Double.isNaN(x)).toArray();
   }
 
   /**
