@@ -116,7 +116,7 @@ class DamagedFileTest {
     assertTrue(ByteBuffer.wrap(whole).getInt(lateral) == Fixture.LATERALS);
     for (int bit = 0; bit < 32; bit++) {
       byte[] b = whole.clone();
-      ByteBuffer.wrap(b).putInt(lateral, Fixture.LATERALS ^ 1 << bit);
+      ByteBuffer.wrap(b).putInt(lateral, Fixture.LATERALS ^ (1 << bit));
       if (reads(b)) {
         throw new AssertionError(name + ", bit " + bit);
       }

@@ -82,7 +82,7 @@ class LabelFileTest {
     }
     String s = refusal(b, GRID);
     assertTrue(s.contains("variable depth") && s.contains("than night.nc, position 0"), s);
-    assertTrue(s.contains("1.002 mm") && s.contains("1.0 mm"), s);
+    assertTrue(s.contains("1.002 mm") && s.contains("expected 1 mm"), s);
   }
 
   @Test

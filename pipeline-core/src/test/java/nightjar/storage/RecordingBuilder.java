@@ -1,6 +1,7 @@
 package nightjar.storage;
 
 import java.io.IOException;
+import java.nio.DoubleBuffer;
 import java.nio.file.Path;
 import java.util.Arrays;
 import java.util.LinkedHashMap;
@@ -24,7 +25,7 @@ final class RecordingBuilder {
   static final int DEPTHS = 5;
   static final int LATERALS = 3;
 
-  private record Column(DataType type, String dimensions, double[] values) {}
+  private record Column(DataType type, String dimensions, DoubleBuffer values) {}
 
   private final Map<String, Integer> dimensions = new LinkedHashMap<>();
   private final Map<String, Column> columns = new LinkedHashMap<>();
@@ -54,7 +55,7 @@ final class RecordingBuilder {
   }
 
   RecordingBuilder variable(String name, DataType type, String dims, double... values) {
-    columns.put(name, new Column(type, dims, values));
+    columns.put(name, new Column(type, dims, DoubleBuffer.wrap(values)));
     return this;
   }
 
@@ -75,7 +76,7 @@ final class RecordingBuilder {
   }
 
   RecordingBuilder value(String variable, int index, double value) {
-    Objects.requireNonNull(columns.get(variable)).values()[index] = value;
+    Objects.requireNonNull(columns.get(variable)).values().put(index, value);
     return this;
   }
 
@@ -106,8 +107,8 @@ final class RecordingBuilder {
       for (Map.Entry<String, Column> e : columns.entrySet()) {
         Variable v = Objects.requireNonNull(added.get(e.getKey()));
         Array a = Array.factory(e.getValue().type(), v.getShape());
-        for (int i = 0; i < e.getValue().values().length; i++) {
-          a.setDouble(i, e.getValue().values()[i]);
+        for (int i = 0; i < e.getValue().values().limit(); i++) {
+          a.setDouble(i, e.getValue().values().get(i));
         }
         w.write(v, a);
       }

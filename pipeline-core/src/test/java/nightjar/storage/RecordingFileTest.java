@@ -192,7 +192,7 @@ class RecordingFileTest {
     try (RecordingFile r = open(b)) {
       float[] values = Fixture.all(r);
       for (int i = 0; i < values.length; i++) {
-        float expected = i > 190 || i == 50 ? Float.NaN : -0.5f * i;
+        float expected = i > 190 || i == 50 ? Float.NaN : 0 - 0.5f * i;
         assertEquals(expected, values[i], "value " + i);
       }
     }
