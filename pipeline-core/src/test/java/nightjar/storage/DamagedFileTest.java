@@ -35,11 +35,11 @@ class DamagedFileTest {
     }
   }
 
-  /** Bytes that the last variable's padding takes up, which some writers leave out. */
+  /** Only the padding behind the last value may be left out, as some writers do. */
   @ParameterizedTest
   @CsvSource({
-    "plain_float, 1",
-    "packed_short, 2",
+    "plain_float, 0",
+    "packed_short, 0",
     "records, 2",
     "one_record_variable, 0",
     "planes_double, 0",
@@ -47,7 +47,7 @@ class DamagedFileTest {
   })
   void aClassicFileCutOffAnywhereIsRefused(String name, int padding) {
     byte[] whole = Fixture.bytes(name);
-    for (int length = 0; length < whole.length - 3; length++) {
+    for (int length = 0; length < whole.length - padding; length += step(length, whole)) {
       if (reads(Arrays.copyOf(whole, length))) {
         throw new AssertionError(name + " cut to " + length + " of " + whole.length);
       }
@@ -56,11 +56,16 @@ class DamagedFileTest {
     assertTrue(reads(Arrays.copyOf(whole, whole.length + 100)), "more bytes do no harm");
   }
 
+  /** Every length near both ends, some in between. */
+  private static int step(int length, byte[] whole) {
+    return length < 200 || length >= whole.length - 20 ? 1 : 7;
+  }
+
   @ParameterizedTest
   @ValueSource(strings = {"chunked_deflate", "contiguous_float", "unlimited_unsigned"})
   void aNetcdf4FileCutOffAnywhereIsRefused(String name) {
     byte[] whole = Fixture.bytes(name);
-    for (int length = 0; length < whole.length; length += length < 100 ? 1 : 97) {
+    for (int length = 0; length < whole.length; length += length < 100 ? 3 : 197) {
       if (reads(Arrays.copyOf(whole, length))) {
         throw new AssertionError(name + " cut to " + length + " of " + whole.length);
       }
@@ -81,7 +86,7 @@ class DamagedFileTest {
     byte[] whole = Fixture.bytes(name);
     SplittableRandom random = new SplittableRandom(20260301);
     int header = Math.min(whole.length, 900);
-    for (int i = 0; i < 400; i++) {
+    for (int i = 0; i < 200; i++) {
       byte[] b = whole.clone();
       for (int k = random.nextInt(1, 4); k > 0; k--) {
         b[random.nextInt(4, header)] = damage(random);
@@ -100,7 +105,7 @@ class DamagedFileTest {
   void aNetcdf4HeaderWithWrongBytesOpensOrIsRefused(String name) {
     byte[] whole = Fixture.bytes(name);
     SplittableRandom random = new SplittableRandom(20260302);
-    for (int i = 0; i < 100; i++) {
+    for (int i = 0; i < 60; i++) {
       byte[] b = whole.clone();
       b[random.nextInt(8, b.length)] = damage(random);
       assertTimeoutPreemptively(Duration.ofSeconds(25), () -> reads(b), name + ", case " + i);
