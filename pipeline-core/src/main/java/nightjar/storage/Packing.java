@@ -14,8 +14,8 @@ final class Packing {
 
   /** Values within stay. */
   private record Bounds(double low, double high) {
-    boolean exclude(double x) {
-      return x < low || x > high;
+    boolean hold(double x) {
+      return x >= low && x <= high;
     }
   }
 
@@ -68,10 +68,10 @@ final class Packing {
   void toFloats(Object primitives, int first, int count, float[] into, int at) {
     if (primitives instanceof float[] a && scale == 1 && offset == 0) {
       System.arraycopy(a, first, into, at, count);
-      for (double m : missing) {
-        blank((float) m, into, at, count);
+      for (int k = 1; k < missing.length; k++) {
+        blank((float) missing[k], into, at, count);
       }
-      keepWithin(storedBounds, into, at, count);
+      keep(into, at, count);
       return;
     }
     double[] scratch = new double[Math.min(count, PIECE_VALUES)];
@@ -87,15 +87,23 @@ final class Packing {
   /** Unpacks to float64; arguments as in {@link #toFloats}. */
   void toDoubles(Object primitives, int first, int count, double[] into, int at) {
     widen(primitives, first, count, into, at);
+    for (int k = 1; k < missing.length; k++) {
+      for (int i = at; i < at + count; i++) {
+        into[i] = into[i] == missing[k] ? Double.NaN : into[i];
+      }
+    }
+    double fill = firstMissing();
     for (int i = at; i < at + count; i++) {
       double stored = into[i];
       double x = stored * scale + offset;
-      boolean out = storedBounds.exclude(stored) || trueBounds.exclude(x);
-      for (double m : missing) {
-        out |= stored == m;
-      }
-      into[i] = out ? Double.NaN : x;
+      boolean stays = stored != fill && storedBounds.hold(stored) && trueBounds.hold(x);
+      into[i] = stays ? x : Double.NaN;
     }
+  }
+
+  /** Most variables have one missing value; NaN, which equals nothing, where there is none. */
+  private double firstMissing() {
+    return missing.length == 0 ? Double.NaN : missing[0];
   }
 
   private static void blank(float missing, float[] a, int at, int count) {
@@ -104,11 +112,13 @@ final class Packing {
     }
   }
 
-  private static void keepWithin(Bounds bounds, float[] a, int at, int count) {
-    float low = (float) bounds.low();
-    float high = (float) bounds.high();
+  private void keep(float[] a, int at, int count) {
+    float low = (float) storedBounds.low();
+    float high = (float) storedBounds.high();
+    float fill = (float) firstMissing();
     for (int i = at; i < at + count; i++) {
-      a[i] = a[i] >= low && a[i] <= high ? a[i] : Float.NaN;
+      float x = a[i];
+      a[i] = x >= low && x <= high && x != fill ? x : Float.NaN;
     }
   }
 
