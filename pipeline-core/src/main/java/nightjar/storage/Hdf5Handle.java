@@ -8,7 +8,6 @@ import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
 import java.util.Objects;
-import nightjar.refusal.RefusedInput;
 import ucar.ma2.Array;
 import ucar.nc2.NetcdfFile;
 import ucar.nc2.Variable;
@@ -49,7 +48,7 @@ final class Hdf5Handle implements AutoCloseable {
   /**
    * Opens a file.
    *
-   * @throws RefusedInput if the library fails or does not come to an end in 20 s
+   * @throws nightjar.refusal.RefusedInput if the library fails or does not come to an end in 20 s
    */
   static Hdf5Handle open(Path path, String fileName) {
     LibraryThread library = new LibraryThread(fileName);
@@ -115,17 +114,6 @@ final class Hdf5Handle implements AutoCloseable {
 
   @Override
   public void close() {
-    try {
-      library.call(
-          READ_DEADLINE,
-          () -> {
-            file.close();
-            return true;
-          });
-    } catch (RefusedInput e) {
-      // Nothing was written, so nothing is lost when the handle of a damaged file stays open.
-    } finally {
-      library.close();
-    }
+    library.closeAfter(file::close);
   }
 }
