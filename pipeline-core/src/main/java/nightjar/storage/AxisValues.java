@@ -1,5 +1,7 @@
 package nightjar.storage;
 
+import java.math.BigDecimal;
+import java.math.MathContext;
 import java.util.OptionalDouble;
 import java.util.function.Function;
 import nightjar.refusal.RefusedInput;
@@ -30,6 +32,13 @@ final class AxisValues {
   /** A variable in millimetres. */
   static double[] millimetres(Container container, StoredVariable v, StoredDimension along) {
     return new AxisValues(container, v, Units::millimetres, Units.LENGTHS).read(along);
+  }
+
+  /** A number for people: nine digits, which hides what binary fractions add. */
+  static String shown(double x) {
+    return Double.isFinite(x)
+        ? new BigDecimal(x, new MathContext(9)).stripTrailingZeros().toPlainString()
+        : Double.toString(x);
   }
 
   private double[] read(StoredDimension along) {

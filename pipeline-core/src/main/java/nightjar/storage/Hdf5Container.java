@@ -4,60 +4,49 @@ import java.io.IOException;
 import java.nio.channels.FileChannel;
 import java.nio.file.Path;
 import java.nio.file.StandardOpenOption;
-import java.time.Duration;
+import java.util.ArrayDeque;
+import java.util.ArrayList;
 import java.util.Arrays;
+import java.util.Deque;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
 import java.util.Objects;
-import nightjar.refusal.RefusedInput;
-import ucar.ma2.Array;
-import ucar.nc2.NetcdfFile;
-import ucar.nc2.Variable;
-import ucar.nc2.iosp.hdf5.H5header;
-import ucar.nc2.iosp.hdf5.H5iosp;
-import ucar.unidata.io.RandomAccessFile;
+import java.util.concurrent.CancellationException;
+import java.util.concurrent.ExecutionException;
+import java.util.concurrent.FutureTask;
 
 /**
- * A netCDF-4 file, read with the NetCDF library on a thread of its own.
+ * A netCDF-4 file, read with the NetCDF library.
+ *
+ * <p>A handle of the library bears one thread and unpacking is slow, so there are as many handles
+ * as threads that read, up to four.
  *
  * <p>Compressed data come in chunks of several frames, and a chunk is unpacked as a whole. So rows
  * are fetched in blocks as deep as the chunks, and the latest blocks are kept: reading frame by
  * frame unpacks each chunk once, as long as a block fits into a sixteenth of the memory.
  */
 final class Hdf5Container implements Container {
-  private static final Duration OPEN_DEADLINE = Duration.ofSeconds(20);
-  private static final Duration READ_DEADLINE = Duration.ofMinutes(2);
-  private static final int BUFFER_BYTES = 64 << 10;
   private static final long LARGEST_CHUNK_BYTES = 512L << 20;
   private static final long PIECE_BYTES = 16L << 20;
   private static final int KEPT_BLOCKS = 4;
-
-  /** Opens with the reader for HDF5 and no other, and without the library's ideas of locations. */
-  private static final class Handle extends NetcdfFile {
-    Handle(RandomAccessFile file, String name) throws IOException {
-      super(new H5iosp(), file, name, null);
-    }
-  }
+  private static final int MOST_HANDLES = 4;
 
   private record Block(String variable, long firstRow) {}
 
+  private final Path path;
   private final String fileName;
-  private final LibraryThread library;
-  private final NetcdfFile file;
-  private final Map<String, Attribute> attributes;
-  private final Map<StoredVariable, Variable> variables = new LinkedHashMap<>();
-  private final Map<Block, Object> kept = new LinkedHashMap<>(16, 0.75f, true);
+  private final Hdf5Handle first;
+  private final List<Hdf5Handle> handles = new ArrayList<>();
+  private final Deque<Hdf5Handle> free = new ArrayDeque<>();
+  private final Map<Block, FutureTask<Object>> kept = new LinkedHashMap<>(16, 0.75f, true);
 
-  private Hdf5Container(String fileName, LibraryThread library, NetcdfFile file) {
+  private Hdf5Container(Path path, String fileName) {
+    this.path = path;
     this.fileName = fileName;
-    this.library = library;
-    this.file = file;
-    this.attributes = Hdf5Description.attributes(file.getGlobalAttributes());
-    for (Variable v : file.getRootGroup().getVariables()) {
-      v.setCaching(false);
-      variables.put(Hdf5Description.variable(v), v);
-    }
+    this.first = Hdf5Handle.open(path, fileName);
+    handles.add(first);
+    free.add(first);
   }
 
   /** Opens a file that begins with the signature of HDF5. */
@@ -68,24 +57,7 @@ final class Hdf5Container implements Container {
     } catch (IOException e) {
       throw Container.unreadable(name);
     }
-    LibraryThread library = new LibraryThread(name);
-    try {
-      return library.call(OPEN_DEADLINE, () -> openHere(path, name, library));
-    } catch (RuntimeException e) {
-      library.close();
-      throw e;
-    }
-  }
-
-  private static Hdf5Container openHere(Path path, String name, LibraryThread library)
-      throws IOException {
-    RandomAccessFile raw = new RandomAccessFile(path.toString(), "r", BUFFER_BYTES);
-    try {
-      return new Hdf5Container(name, library, new Handle(raw, name));
-    } catch (IOException | RuntimeException | Error e) {
-      raw.close();
-      throw e;
-    }
+    return new Hdf5Container(path, name);
   }
 
   @Override
@@ -100,12 +72,12 @@ final class Hdf5Container implements Container {
 
   @Override
   public List<StoredVariable> variables() {
-    return List.copyOf(variables.keySet());
+    return first.variables();
   }
 
   @Override
   public Map<String, Attribute> attributes() {
-    return attributes;
+    return first.attributes();
   }
 
   @Override
@@ -114,11 +86,10 @@ final class Hdf5Container implements Container {
     if (variable.values() == 0) {
       return;
     }
-    Variable v = Objects.requireNonNull(variables.get(variable));
-    long depth = Math.min(chunkDepth(variable, v), variable.rows());
+    long depth = Math.min(chunkDepth(variable), variable.rows());
     long rowBytes = StoredVariable.times(variable.rowValues(), variable.type().bytes());
-    boolean keep =
-        depth > 1 && StoredVariable.times(depth, rowBytes) <= Runtime.getRuntime().maxMemory() / 16;
+    long blockBytes = StoredVariable.times(depth, rowBytes);
+    boolean keep = depth > 1 && blockBytes <= Runtime.getRuntime().maxMemory() / 16;
     long most = keep ? depth : Math.max(1, PIECE_BYTES / rowBytes);
     long end = firstRow + rows;
     for (long row = firstRow; row < end; ) {
@@ -126,53 +97,82 @@ final class Hdf5Container implements Container {
       long n = Math.min(end, from + most) - row;
       Object values =
           keep
-              ? block(variable, v, from, Math.min(depth, variable.rows() - from))
-              : fetch(variable, v, row, n);
+              ? block(variable, from, Math.min(depth, variable.rows() - from))
+              : fetch(variable, row, n);
       into.take(
           values, (int) ((row - from) * variable.rowValues()), (int) (n * variable.rowValues()));
       row += n;
     }
   }
 
-  private synchronized Object block(StoredVariable variable, Variable v, long firstRow, long rows) {
+  /** A block, unpacked by the first thread that asks for it; others wait for that one. */
+  private Object block(StoredVariable variable, long firstRow, long rows) {
     Block key = new Block(variable.name(), firstRow);
-    Object values = kept.get(key);
-    if (values == null) {
-      if (kept.size() >= KEPT_BLOCKS) {
-        kept.remove(kept.keySet().iterator().next());
+    FutureTask<Object> block;
+    synchronized (kept) {
+      block = kept.get(key);
+      if (block == null) {
+        if (kept.size() >= KEPT_BLOCKS) {
+          kept.remove(kept.keySet().iterator().next());
+        }
+        block = new FutureTask<>(() -> fetch(variable, firstRow, rows));
+        kept.put(key, block);
       }
-      values = fetch(variable, v, firstRow, rows);
-      kept.put(key, values);
     }
-    return values;
+    block.run();
+    try {
+      return block.get();
+    } catch (ExecutionException e) {
+      synchronized (kept) {
+        kept.remove(key, block);
+      }
+      if (e.getCause() instanceof RuntimeException r) {
+        throw r;
+      }
+      throw new IllegalStateException(e.getCause());
+    } catch (InterruptedException e) {
+      Thread.currentThread().interrupt();
+      throw new CancellationException("interrupted");
+    }
   }
 
-  private Object fetch(StoredVariable variable, Variable v, long firstRow, long rows) {
-    int[] shape = v.getShape();
-    int[] origin = new int[shape.length];
-    if (shape.length > 0) {
-      origin[0] = (int) firstRow;
-      shape[0] = (int) rows;
+  private Object fetch(StoredVariable variable, long firstRow, long rows) {
+    Hdf5Handle handle = borrow();
+    try {
+      return handle.fetch(variable, firstRow, rows);
+    } finally {
+      giveBack(handle);
     }
-    return library.call(
-        READ_DEADLINE,
-        () -> {
-          Array a = v.read(origin, shape);
-          Object values = a.get1DJavaArray(a.getElementType());
-          long found = java.lang.reflect.Array.getLength(values);
-          if (found != rows * variable.rowValues()) {
-            throw new IOException(variable.name() + " has " + found + " values");
-          }
-          return values;
-        });
+  }
+
+  private synchronized Hdf5Handle borrow() {
+    while (free.isEmpty() && handles.size() == MOST_HANDLES) {
+      try {
+        wait();
+      } catch (InterruptedException e) {
+        Thread.currentThread().interrupt();
+        throw new CancellationException("interrupted");
+      }
+    }
+    if (free.isEmpty()) {
+      Hdf5Handle another = Hdf5Handle.open(path, fileName);
+      handles.add(another);
+      return another;
+    }
+    return free.pop();
+  }
+
+  private synchronized void giveBack(Hdf5Handle handle) {
+    free.push(handle);
+    notifyAll();
   }
 
   /** Rows a chunk; 1 where the values lie in one piece. */
-  private long chunkDepth(StoredVariable variable, Variable v) {
-    if (!(v.getSPobject() instanceof H5header.Vinfo info) || !info.isChunked()) {
+  private long chunkDepth(StoredVariable variable) {
+    int[] chunk = first.chunk(variable);
+    if (chunk.length == 0) {
       return 1;
     }
-    int[] chunk = Arrays.copyOf(info.getChunking(), variable.rank());
     long bytes = variable.type().bytes();
     for (int n : chunk) {
       bytes = StoredVariable.times(bytes, Math.max(0, n));
@@ -187,18 +187,8 @@ final class Hdf5Container implements Container {
   }
 
   @Override
-  public void close() {
-    try {
-      library.call(
-          READ_DEADLINE,
-          () -> {
-            file.close();
-            return true;
-          });
-    } catch (RefusedInput e) {
-      // Nothing was written, so nothing is lost when the handle of a damaged file stays open.
-    } finally {
-      library.close();
-    }
+  public synchronized void close() {
+    handles.forEach(Hdf5Handle::close);
+    free.clear();
   }
 }

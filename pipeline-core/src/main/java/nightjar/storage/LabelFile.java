@@ -61,8 +61,8 @@ public final class LabelFile {
       if (!(Math.abs(mm[i] - axis.at(i)) <= largest)) {
         throw container
             .refusal(v, "the labels are on another grid than " + recordingName + ", position " + i)
-            .found(mm[i] + " mm")
-            .expected(axis.at(i) + " mm")
+            .found(AxisValues.shown(mm[i]) + " mm")
+            .expected(AxisValues.shown(axis.at(i)) + " mm")
             .remedy("draw them on the grid of the recording");
       }
     }

@@ -1,6 +1,9 @@
 package nightjar.storage;
 
+import java.io.Closeable;
+import java.io.IOException;
 import java.time.Duration;
+import java.util.Objects;
 import java.util.concurrent.Callable;
 import java.util.concurrent.CancellationException;
 import java.util.concurrent.ExecutionException;
@@ -46,7 +49,7 @@ final class LibraryThread implements AutoCloseable {
       if (e.getCause() instanceof RefusedInput refused) {
         throw refused;
       }
-      throw refusal(String.valueOf(e.getCause()));
+      throw refusal(inShort(Objects.requireNonNullElse(e.getCause(), e)));
     } catch (TimeoutException e) {
       result.cancel(true);
       throw refusal("no end after " + deadline.toSeconds() + " s");
@@ -57,11 +60,36 @@ final class LibraryThread implements AutoCloseable {
     }
   }
 
+  /** Kind and message of a fault, in words that need no knowledge of Java. */
+  private static String inShort(Throwable fault) {
+    String kind = fault.getClass().getSimpleName().replaceAll("(Exception|Error)$", "");
+    String message = fault.getMessage();
+    return message == null ? kind : kind + ": " + message;
+  }
+
   private RefusedInput refusal(String found) {
     return RefusedInput.because("the netCDF-4 file cannot be read, it seems to be damaged")
         .in(fileName)
         .found(found.substring(0, Math.min(200, found.length())))
         .remedy("copy it again from where it was recorded, or convert it to 64-bit offset");
+  }
+
+  /**
+   * Ends the thread after a last call, whose failure does no harm: nothing was written. Returns at
+   * once, even where the library never comes back.
+   */
+  void closeAfter(Closeable last) {
+    if (!thread.isShutdown()) {
+      thread.execute(
+          () -> {
+            try {
+              last.close();
+            } catch (IOException e) {
+              // harmless, as said above
+            }
+          });
+      thread.shutdown();
+    }
   }
 
   @Override

@@ -1,48 +1,29 @@
 package nightjar.storage;
 
-import java.util.stream.DoubleStream;
 import org.jspecify.annotations.Nullable;
 
 /**
- * From stored to true values: {@code true = stored * scale_factor + add_offset}, missing ones NaN
- * (CF Conventions 1.11, sections 2.5.1 and 8.1; NetCDF User's Guide, appendix A, for the default
- * fill values, which mark what was never written, and for bounds of packed variables given in true
- * values). Immutable.
+ * From stored to true values: {@code true = stored * scale_factor + add_offset} (CF Conventions
+ * 1.11, section 8.1), missing ones NaN. Immutable.
  */
 final class Packing {
   private static final int PIECE_VALUES = 4096;
 
-  /** Values within stay. */
-  private record Bounds(double low, double high) {
-    static final Bounds NONE = new Bounds(Double.NEGATIVE_INFINITY, Double.POSITIVE_INFINITY);
-
-    boolean exclude(double x) {
-      return x < low || x > high;
-    }
-  }
-
-  private final StoredVariable variable;
   private final double scale;
   private final double offset;
   private final boolean isUnsigned;
   private final double[] missing;
-  private final Bounds storedBounds;
-  private final Bounds trueBounds;
+  private final MissingRules.Bounds storedBounds;
+  private final MissingRules.Bounds trueBounds;
 
   private Packing(StoredVariable variable, double scale, double offset) {
-    this.variable = variable;
     this.scale = scale;
     this.offset = offset;
-    Attribute sign = variable.attribute("_Unsigned");
-    isUnsigned =
-        sign != null && variable.type().isWhole() && sign.display().equalsIgnoreCase("true");
-    missing =
-        DoubleStream.concat(fillValues(), missingValues())
-            .filter(m -> !Double.isNaN(m))
-            .distinct()
-            .toArray();
-    storedBounds = bounds(false);
-    trueBounds = bounds(true);
+    MissingRules rules = new MissingRules(variable, scale, offset);
+    this.isUnsigned = rules.isUnsigned();
+    this.missing = rules.marks();
+    this.storedBounds = rules.bounds(false);
+    this.trueBounds = rules.bounds(true);
   }
 
   /** The packing that the attributes of a variable describe. */
@@ -70,10 +51,10 @@ final class Packing {
   void toFloats(Object primitives, int first, int count, float[] into, int at) {
     if (primitives instanceof float[] a && scale == 1 && offset == 0) {
       System.arraycopy(a, first, into, at, count);
-      for (double m : missing) {
-        blank((float) m, into, at, count);
+      for (int k = 1; k < missing.length; k++) {
+        blank((float) missing[k], into, at, count);
       }
-      keepWithin(storedBounds, into, at, count);
+      keep(into, at, count);
       return;
     }
     double[] scratch = new double[Math.min(count, PIECE_VALUES)];
@@ -89,15 +70,23 @@ final class Packing {
   /** Unpacks to float64; arguments as in {@link #toFloats}. */
   void toDoubles(Object primitives, int first, int count, double[] into, int at) {
     widen(primitives, first, count, into, at);
+    for (int k = 1; k < missing.length; k++) {
+      for (int i = at; i < at + count; i++) {
+        into[i] = into[i] == missing[k] ? Double.NaN : into[i];
+      }
+    }
+    double fill = firstMissing();
     for (int i = at; i < at + count; i++) {
       double stored = into[i];
       double x = stored * scale + offset;
-      boolean out = storedBounds.exclude(stored) || trueBounds.exclude(x);
-      for (double m : missing) {
-        out |= stored == m;
-      }
-      into[i] = out ? Double.NaN : x;
+      boolean stays = stored != fill && storedBounds.hold(stored) && trueBounds.hold(x);
+      into[i] = stays ? x : Double.NaN;
     }
+  }
+
+  /** Most variables have one missing value; NaN, which equals nothing, where there is none. */
+  private double firstMissing() {
+    return missing.length == 0 ? Double.NaN : missing[0];
   }
 
   private static void blank(float missing, float[] a, int at, int count) {
@@ -106,12 +95,13 @@ final class Packing {
     }
   }
 
-  private static void keepWithin(Bounds bounds, float[] a, int at, int count) {
-    if (bounds.equals(Bounds.NONE)) {
-      return;
-    }
+  private void keep(float[] a, int at, int count) {
+    float low = (float) storedBounds.low();
+    float high = (float) storedBounds.high();
+    float fill = (float) firstMissing();
     for (int i = at; i < at + count; i++) {
-      a[i] = bounds.exclude(a[i]) ? Float.NaN : a[i];
+      float x = a[i];
+      a[i] = x >= low && x <= high && x != fill ? x : Float.NaN;
     }
   }
 
@@ -142,71 +132,6 @@ final class Packing {
     } else {
       System.arraycopy((double[]) primitives, first, into, at, count);
     }
-  }
-
-  private DoubleStream fillValues() {
-    Attribute fill = variable.attribute("_FillValue");
-    return fill != null && fill.numbers().length > 0
-        ? DoubleStream.of(fill.numbers()).map(this::asStored)
-        : DoubleStream.of(defaultFill());
-  }
-
-  /** NC_FILL_SHORT and so on of the C library's netcdf.h; bytes have none in practice. */
-  private double defaultFill() {
-    return switch (variable.type()) {
-      case SHORT -> isUnsigned ? 65535 : -32767;
-      case INT -> isUnsigned ? 4294967295.0 : -2147483647;
-      case LONG -> -0x1p63;
-      case FLOAT, DOUBLE -> 9.9692099683868690e36;
-      default -> Double.NaN;
-    };
-  }
-
-  private DoubleStream missingValues() {
-    Attribute a = variable.attribute("missing_value");
-    if (a == null) {
-      return DoubleStream.empty();
-    }
-    return isInTrueValues(a)
-        ? DoubleStream.of(a.numbers()).map(m -> Math.rint((m - offset) / scale))
-        : DoubleStream.of(a.numbers()).map(this::asStored);
-  }
-
-  /** An attribute's number as a variable of this type would store it. */
-  private double asStored(double number) {
-    if (isUnsigned && number < 0) {
-      return number + Math.pow(2, 8 * variable.type().bytes());
-    }
-    return variable.type() == ValueType.FLOAT ? (float) number : number;
-  }
-
-  private Bounds bounds(boolean inTrueValues) {
-    double low = Double.NEGATIVE_INFINITY;
-    double high = Double.POSITIVE_INFINITY;
-    double[] range = bound("valid_range", inTrueValues);
-    if (range.length == 2) {
-      return new Bounds(range[0], range[1]);
-    }
-    double[] least = bound("valid_min", inTrueValues);
-    double[] most = bound("valid_max", inTrueValues);
-    return new Bounds(least.length == 1 ? least[0] : low, most.length == 1 ? most[0] : high);
-  }
-
-  private double[] bound(String name, boolean inTrueValues) {
-    Attribute a = variable.attribute(name);
-    return a == null || isInTrueValues(a) != inTrueValues
-        ? new double[0]
-        : DoubleStream.of(a.numbers()).map(this::asStored).toArray();
-  }
-
-  /**
-   * Whether a bound of a packed variable is meant in true values: it is not a whole number though
-   * the stored ones are (NetCDF User's Guide, appendix A, valid_range).
-   */
-  private boolean isInTrueValues(Attribute bound) {
-    boolean isPacked =
-        variable.attribute("scale_factor") != null || variable.attribute("add_offset") != null;
-    return isPacked && variable.type().isWhole() && !bound.type().isWhole();
   }
 
   private static double number(

@@ -48,8 +48,8 @@ final class SpatialAxes {
             container.refusal(
                 v, "the positions " + (i - 1) + " and " + i + " are not equally spaced");
         throw refusal
-            .found(step + " mm")
-            .expected(mean + " mm within 1 %")
+            .found(AxisValues.shown(step) + " mm")
+            .expected(AxisValues.shown(mean) + " mm within 1 %")
             .remedy("resample the recording to equal steps");
       }
     }

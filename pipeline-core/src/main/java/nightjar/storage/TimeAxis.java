@@ -27,7 +27,11 @@ final class TimeAxis {
       if (!(seconds[i] > seconds[i - 1])) {
         throw container
             .refusal(axis.get(), "time does not increase from frame " + (i - 1) + " to " + i)
-            .found(seconds[i - 1] + " s, then " + seconds[i] + " s")
+            .found(
+                AxisValues.shown(seconds[i - 1])
+                    + " s, then "
+                    + AxisValues.shown(seconds[i])
+                    + " s")
             .remedy("write the frames in the order of their times, each once");
       }
     }
