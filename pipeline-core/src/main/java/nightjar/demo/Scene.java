@@ -41,7 +41,7 @@ final class Scene {
         image[z * laterals + x] = (float) ((inside ? TISSUE : OUTSIDE) * uneven / 1.5);
       }
     }
-    new VesselTree(image, depths, laterals, FINE, random).grow(surface, height);
+    new VesselTree(image, surface, FINE, random).grow(height);
     return new Scene(
         attenuated(blurred(image, depths, laterals), depths, laterals), depths, laterals);
   }

@@ -12,16 +12,19 @@ final class VesselTree {
   private final int depths;
   private final int laterals;
   private final int fine;
+  private final double[] surface;
   private final NormalStream random;
 
   /**
    * @param image modified, {@code [depths][laterals]}
+   * @param surface depth of the brain's surface at each lateral sample
    * @param fine samples a voxel
    */
-  VesselTree(float[] image, int depths, int laterals, int fine, NormalStream random) {
+  VesselTree(float[] image, double[] surface, int fine, NormalStream random) {
     this.image = image;
-    this.depths = depths;
-    this.laterals = laterals;
+    this.surface = surface;
+    this.laterals = surface.length;
+    this.depths = image.length / laterals;
     this.fine = fine;
     this.random = random;
   }
@@ -30,24 +33,24 @@ final class VesselTree {
   private record Course(
       double depth, double lateral, double angle, double length, double power, int order) {}
 
-  /** Grows all vessels under a surface given in samples per lateral sample. */
-  void grow(double[] surface, double height) {
+  /** Grows all vessels of a brain about {@code height} samples high. */
+  void grow(double height) {
     for (int k = 0; k < 20; k++) {
       int x = (int) ((k + random.uniform()) / 20 * (laterals - 1));
       double bend = (x - 0.5 * laterals) / laterals;
       double length = random.uniform(0.15, 0.4) * height;
       // Penetrating vessels follow the curve of the surface inwards.
-      paint(new Course(surface[x], x, -0.8 * bend, length, random.uniform(3, 9), 0));
+      paint(new Course(surface[x], x, -0.8 * bend, length, random.uniform(8, 25), 0));
     }
     for (int k = 0; k < 7; k++) {
       double angle = random.uniform(0.25, 0.75) * StrictMath.PI * (k % 2 == 0 ? 1 : -1);
       double depth = random.uniform(0.45, 0.85) * height;
       double lateral = random.uniform(0.2, 0.8) * laterals;
       double length = random.uniform(0.2, 0.45) * height;
-      paint(new Course(depth, lateral, angle, length, random.uniform(6, 16), 0));
+      paint(new Course(depth, lateral, angle, length, random.uniform(15, 45), 0));
     }
     for (int x = 0; x < laterals; x++) {
-      add(surface[x] + 0.5 * fine, x, 2 + StrictMath.sin(0.11 * x / fine) * 1.5);
+      add(surface[x] + 0.5 * fine, x, 5 + 3 * StrictMath.sin(0.11 * x / fine));
     }
   }
 
@@ -74,7 +77,7 @@ final class VesselTree {
   private void add(double depth, double lateral, double power) {
     int z = (int) depth;
     int x = (int) lateral;
-    if (z >= 0 && z < depths && x >= 0 && x < laterals) {
+    if (x >= 0 && x < laterals && z >= surface[x] && z < depths) {
       image[z * laterals + x] += (float) power;
     }
   }
