@@ -15,5 +15,5 @@ public record DemoDisturbance(double wanderMillimetres, int jerks, int flashes) 
   public static final DemoDisturbance ORDINARY = new DemoDisturbance(0.03, 2, 3);
 
   /** A session that nobody should use. */
-  public static final DemoDisturbance SPOILED = new DemoDisturbance(0.06, 25, 70);
+  public static final DemoDisturbance SPOILED = new DemoDisturbance(0.06, 25, 100);
 }
