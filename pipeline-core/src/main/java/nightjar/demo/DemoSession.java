@@ -38,6 +38,7 @@ public record DemoSession(
     DemoFiles files = DemoFiles.in(folder, name);
     try {
       Files.createDirectories(folder);
+      DemoRecording.write(this, truth, files.recording());
       Files.writeString(files.events(), TrialSchedule.text(truth.events()));
       Files.writeString(files.truth(), TruthText.of(this, truth));
     } catch (IOException e) {
