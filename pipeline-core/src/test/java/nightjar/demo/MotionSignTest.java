@@ -15,9 +15,7 @@ class MotionSignTest {
   private static final DemoSession SESSION =
       new DemoSession("s", 5, SCAN, new DemoAnimal("a", "young", 0, 0), DemoDisturbance.NONE, 0.3);
 
-  /**
-   * Tissue does not carry the drift along, which differs by less than 8 % between any two places.
-   */
+  /** Drift stays where it is when tissue moves; two places differ by less than this share. */
   private static final double DRIFT = 0.16;
 
   @Test
