@@ -60,8 +60,8 @@ final class Gradient {
     int size = slab.depths() * slab.laterals();
     int before = v >= size ? v - size : v;
     int after = v + size < image.length ? v + size : v;
-    return before == after
-        ? 0
-        : ((double) image[after] - image[before]) / ((after - before) / size * slab.planeStep());
+    int steps = (after - before) / size;
+    double change = (double) image[after] - image[before];
+    return steps == 0 ? 0 : change / (steps * slab.planeStep());
   }
 }
