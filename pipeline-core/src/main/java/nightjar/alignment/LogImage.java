@@ -84,12 +84,16 @@ final class LogImage {
   }
 
   private static void alongLine(float[] padded, float[] into) {
+    float k0 = KERNEL[RADIUS];
+    float k1 = KERNEL[RADIUS + 1];
+    float k2 = KERNEL[RADIUS + 2];
+    float k3 = KERNEL[RADIUS + 3];
     for (int x = 0; x < into.length; x++) {
-      float s = 0;
-      for (int k = 0; k < KERNEL.length; k++) {
-        s += KERNEL[k] * padded[x + k];
-      }
-      into[x] = s;
+      into[x] =
+          k0 * padded[x + 3]
+              + k1 * (padded[x + 2] + padded[x + 4])
+              + k2 * (padded[x + 1] + padded[x + 5])
+              + k3 * (padded[x] + padded[x + 6]);
     }
   }
 

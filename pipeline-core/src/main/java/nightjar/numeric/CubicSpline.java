@@ -10,6 +10,7 @@ package nightjar.numeric;
  */
 public final class CubicSpline {
   private static final double POLE = Math.sqrt(3) - 2;
+  private static final double SIXTH = 1.0 / 6;
 
   /** The pole to this power is below the rounding of a float. */
   private static final int HORIZON = 24;
@@ -77,9 +78,9 @@ public final class CubicSpline {
     int p = (int) Math.floor(plane);
     double f = plane - p;
     double e = 1 - f;
-    double w0 = e * e * e / 6;
-    double w1 = 2.0 / 3 - f * f * (2 - f) / 2;
-    double w3 = f * f * f / 6;
+    double w0 = e * e * e * SIXTH;
+    double w1 = 2.0 / 3 - 0.5 * f * f * (2 - f);
+    double w3 = f * f * f * SIXTH;
     double w2 = 1 - w0 - w1 - w3;
     return w0 * inPlane(mirrored[p + PAD - 1], depth, lateral)
         + w1 * inPlane(mirrored[p + PAD], depth, lateral)
@@ -92,15 +93,15 @@ public final class CubicSpline {
     int x = (int) Math.floor(lateral);
     double f = depth - z;
     double e = 1 - f;
-    double w0 = e * e * e / 6;
-    double w1 = 2.0 / 3 - f * f * (2 - f) / 2;
-    double w3 = f * f * f / 6;
+    double w0 = e * e * e * SIXTH;
+    double w1 = 2.0 / 3 - 0.5 * f * f * (2 - f);
+    double w3 = f * f * f * SIXTH;
     double w2 = 1 - w0 - w1 - w3;
     double g = lateral - x;
     double h = 1 - g;
-    double v0 = h * h * h / 6;
-    double v1 = 2.0 / 3 - g * g * (2 - g) / 2;
-    double v3 = g * g * g / 6;
+    double v0 = h * h * h * SIXTH;
+    double v1 = 2.0 / 3 - 0.5 * g * g * (2 - g);
+    double v3 = g * g * g * SIXTH;
     double v2 = 1 - v0 - v1 - v3;
     int i = x + PAD - 1;
     int r = z + PAD - 1;
