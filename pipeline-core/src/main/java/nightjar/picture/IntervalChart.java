@@ -1,0 +1,123 @@
+package nightjar.picture;
+
+import java.util.List;
+
+/**
+ * Values with their intervals, one row each, around zero: filled where they are significant, open
+ * where they are not.
+ *
+ * @param title read aloud in place of the picture
+ * @param abscissa name and unit of the values
+ * @param rows from the top
+ */
+public record IntervalChart(String title, String abscissa, List<Row> rows) {
+  private static final double WIDTH = 680;
+  private static final double ROW = 24;
+  private static final double FOOT = 40;
+  private static final double LONGEST_NAME = 220;
+
+  public IntervalChart {
+    rows = List.copyOf(rows);
+  }
+
+  /** How a row is marked. */
+  public enum Marker {
+    /** Significant. */
+    FILLED,
+    /** Not significant. */
+    OPEN
+  }
+
+  /**
+   * One value; NaN where there is none.
+   *
+   * @param name what it is of
+   * @param value the dot
+   * @param low lower end
+   * @param high upper end
+   * @param marker how the dot is drawn
+   */
+  public record Row(String name, double value, double low, double high, Marker marker) {
+    private boolean isNumber() {
+      return Double.isFinite(value) && Double.isFinite(low) && Double.isFinite(high);
+    }
+  }
+
+  /** The picture as one SVG element. */
+  public String svg() {
+    double names =
+        rows.stream()
+            .mapToDouble(r -> Math.min(LONGEST_NAME, Svg.widthOf(r.name())))
+            .max()
+            .orElse(0);
+    double left = names + 20;
+    double bottom = 8 + ROW * rows.size();
+    Svg svg = new Svg(title, WIDTH, bottom + FOOT);
+    PlotArea area = new PlotArea(left, WIDTH - 16, 8, bottom, range(), new PlotArea.Range(0, 1));
+    axis(svg, area);
+    for (int i = 0; i < rows.size(); i++) {
+      draw(svg, area, rows.get(i), 8 + ROW * (i + 0.5));
+    }
+    return svg.finish();
+  }
+
+  private PlotArea.Range range() {
+    double low = 0;
+    double high = 0;
+    for (Row r : rows) {
+      if (r.isNumber()) {
+        low = Math.min(low, r.low());
+        high = Math.max(high, r.high());
+      }
+    }
+    return PlotArea.Range.around(low, high).widened(0.04);
+  }
+
+  private void axis(Svg svg, PlotArea area) {
+    NiceTicks ticks = NiceTicks.between(area.horizontal().low(), area.horizontal().high(), 9);
+    for (double v : ticks.values()) {
+      svg.line(area.x(v), area.top(), area.x(v), area.bottom() + 4, v == 0 ? 0.7 : 0.13);
+      svg.text(area.x(v), area.bottom() + 17, "middle", ticks.label(v));
+    }
+    svg.line(area.left(), area.bottom(), area.right(), area.bottom(), 1);
+    svg.text((area.left() + area.right()) / 2, area.bottom() + 34, "middle", abscissa);
+  }
+
+  private static void draw(Svg svg, PlotArea area, Row r, double y) {
+    svg.text(area.left() - 10, y + 4, "end", Svg.fit(r.name(), LONGEST_NAME));
+    if (!r.isNumber()) {
+      svg.text(area.left() + 8, y + 4, "start", "no voxels");
+      return;
+    }
+    String line = "stroke=\"currentColor\" stroke-width=\"1.6\"";
+    svg.add(
+        "<path fill=\"none\" "
+            + line
+            + " d=\"M"
+            + Svg.number(area.x(r.low()))
+            + " "
+            + Svg.number(y)
+            + "H"
+            + Svg.number(area.x(r.high()))
+            + "M"
+            + Svg.number(area.x(r.low()))
+            + " "
+            + Svg.number(y - 4)
+            + "v8M"
+            + Svg.number(area.x(r.high()))
+            + " "
+            + Svg.number(y - 4)
+            + "v8\"/>");
+    String fill = r.marker() == Marker.FILLED ? "currentColor" : "var(--paper,#fff)";
+    svg.add(
+        "<circle cx=\""
+            + Svg.number(area.x(r.value()))
+            + "\" cy=\""
+            + Svg.number(y)
+            + "\" r=\"4.5\" "
+            + line
+            + " fill=\""
+            + fill
+            + "\"/>");
+  }
+}

@@ -1,0 +1,172 @@
+package nightjar.picture;
+
+import java.util.function.IntUnaryOperator;
+import nightjar.recording.Axis;
+import nightjar.recording.Grid;
+import nightjar.recording.Mask;
+
+/** Draws one plane of a contact sheet. */
+final class PlanePanel {
+  private static final double TICK = 4;
+  private static final double PIXELS_A_TICK = 48;
+
+  private final Svg svg;
+  private final SheetLayout layout;
+  private final Grid grid;
+  private final int plane;
+  private final double left;
+  private final double top;
+
+  PlanePanel(Svg svg, SheetLayout layout, Grid grid, int plane) {
+    this.svg = svg;
+    this.layout = layout;
+    this.grid = grid;
+    this.plane = plane;
+    this.left = layout.left(plane);
+    this.top = layout.top(plane);
+  }
+
+  /** Lays pixels over the plane; {@code pixel} gives the colour of a voxel of the grid. */
+  void image(IntUnaryOperator pixel) {
+    int first = plane * grid.planeVoxels();
+    int[] argb = new int[grid.planeVoxels()];
+    for (int i = 0; i < argb.length; i++) {
+      argb[i] = pixel.applyAsInt(first + i);
+    }
+    String png = PngImage.base64(grid.laterals().size(), grid.depths().size(), argb);
+    svg.image(left, top, layout.panelWidth(), layout.panelHeight(), png);
+  }
+
+  /** A line on a light ground, so that it is seen over dark and bright voxels alike. */
+  void outline(Outline outline) {
+    String path = boundary(outline.voxels());
+    path(path, "stroke=\"#fff\" stroke-opacity=\"0.85\" stroke-width=\"2.4\"");
+    String dashes =
+        outline.stroke() == Outline.Stroke.DASHED ? " stroke-dasharray=\"3.5 2.5\"" : "";
+    path(path, "stroke=\"#000\" stroke-width=\"1.1\"" + dashes);
+  }
+
+  /** The outline of a region. */
+  void region(Mask voxels, int rgb) {
+    String path = boundary(voxels);
+    path(path, "stroke=\"#fff\" stroke-opacity=\"0.7\" stroke-width=\"3\"");
+    path(path, "stroke=\"" + Palette.css(rgb) + "\" stroke-width=\"1.8\"");
+  }
+
+  private String boundary(Mask voxels) {
+    int first = plane * grid.planeVoxels();
+    return BoundaryPath.of(
+        grid.laterals().size(), grid.depths().size(), i -> voxels.contains(first + i));
+  }
+
+  private void path(String path, String stroke) {
+    if (path.isEmpty()) {
+      return;
+    }
+    // Six decimals: a hundredth of a scale would shift the far edge by pixels.
+    String scale =
+        String.format(
+            java.util.Locale.ROOT,
+            "%.6f %.6f",
+            layout.panelWidth() / grid.laterals().size(),
+            layout.panelHeight() / grid.depths().size());
+    svg.add(
+        "<path fill=\"none\" vector-effect=\"non-scaling-stroke\" "
+            + stroke
+            + " transform=\"translate("
+            + Svg.number(left)
+            + " "
+            + Svg.number(top)
+            + ") scale("
+            + scale
+            + ")\" d=\""
+            + path
+            + "\"/>");
+  }
+
+  /** Frame, ticks in mm, the plane's place and, on the first plane, the scale bar. */
+  void axes() {
+    svg.box(
+        left,
+        top,
+        layout.panelWidth(),
+        layout.panelHeight(),
+        "fill=\"none\" stroke=\"currentColor\"");
+    if (grid.hasPlaneAxis()) {
+      svg.text(left + layout.panelWidth() / 2, top - 6, "middle", place());
+    }
+    if (layout.atLeft(plane)) {
+      depthAxis();
+    }
+    if (layout.atBottom(plane, grid.planes().size())) {
+      lateralAxis();
+    }
+    if (plane == 0) {
+      scaleBar();
+    }
+  }
+
+  private String place() {
+    String number = "plane " + plane;
+    double mm = grid.planes().at(plane);
+    String full = number + ", " + String.format(java.util.Locale.ROOT, "%.2f mm", mm);
+    String signed = full.replace("-", "\u2212");
+    return Svg.widthOf(signed) <= layout.panelWidth() + 10 ? signed : Integer.toString(plane);
+  }
+
+  private void depthAxis() {
+    NiceTicks ticks = ticks(grid.depths(), layout.panelHeight());
+    for (double mm : ticks.values()) {
+      double y = top + share(grid.depths(), mm) * layout.panelHeight();
+      svg.line(left - TICK, y, left, y, 1);
+      svg.text(left - TICK - 3, y + 4, "end", ticks.label(mm));
+    }
+    svg.textUpwards(left - 38, top + layout.panelHeight() / 2, "depth (mm)");
+  }
+
+  private void lateralAxis() {
+    double bottom = top + layout.panelHeight();
+    NiceTicks ticks = ticks(grid.laterals(), layout.panelWidth());
+    for (double mm : ticks.values()) {
+      double x = left + share(grid.laterals(), mm) * layout.panelWidth();
+      svg.line(x, bottom, x, bottom + TICK, 1);
+      svg.text(x, bottom + TICK + 12, "middle", ticks.label(mm));
+    }
+    svg.text(left + layout.panelWidth() / 2, bottom + TICK + 27, "middle", "lateral (mm)");
+  }
+
+  private NiceTicks ticks(Axis axis, double pixels) {
+    double half = SheetLayout.spacing(axis, grid) / 2;
+    double a = axis.at(0);
+    double b = axis.at(axis.size() - 1);
+    int most = Math.max(2, (int) (pixels / PIXELS_A_TICK));
+    return NiceTicks.between(Math.min(a, b) - half, Math.max(a, b) + half, most);
+  }
+
+  /** Where a coordinate lies between the outer edges of the first and the last voxel, 0 to 1. */
+  private double share(Axis axis, double mm) {
+    int n = axis.size();
+    double step =
+        n == 1 ? SheetLayout.spacing(axis, grid) : (axis.at(n - 1) - axis.at(0)) / (n - 1);
+    return ((mm - axis.at(0)) / step + 0.5) / n;
+  }
+
+  private void scaleBar() {
+    double extent = SheetLayout.extent(grid.laterals(), grid);
+    NiceTicks ticks = NiceTicks.between(0, extent, 5);
+    double length = ticks.step() / extent * layout.panelWidth();
+    double x = left + layout.panelWidth() - length - 8;
+    double y = top + layout.panelHeight() - 9;
+    svg.box(x - 1, y - 1, length + 2, 5, "fill=\"#000\" fill-opacity=\"0.8\"");
+    svg.box(x, y, length, 3, "fill=\"#fff\"");
+    svg.add(
+        "<text x=\""
+            + Svg.number(x + length)
+            + "\" y=\""
+            + Svg.number(y - 5)
+            + "\" text-anchor=\"end\" fill=\"#fff\" stroke=\"#000\" stroke-width=\"3\""
+            + " stroke-linejoin=\"round\" paint-order=\"stroke\">"
+            + ticks.label(ticks.step())
+            + " mm</text>");
+  }
+}
