@@ -14,6 +14,7 @@ public record IntervalChart(String title, String abscissa, List<Row> rows) {
   private static final double WIDTH = 680;
   private static final double ROW = 24;
   private static final double FOOT = 40;
+  private static final double RADIUS = 4.5;
   private static final double LONGEST_NAME = 220;
 
   public IntervalChart {
@@ -89,35 +90,43 @@ public record IntervalChart(String title, String abscissa, List<Row> rows) {
       svg.text(area.left() + 8, y + 4, "start", "no voxels");
       return;
     }
-    String line = "stroke=\"currentColor\" stroke-width=\"1.6\"";
+    double value = area.x(r.value());
+    double low = Math.min(area.x(r.low()), value - RADIUS);
+    double high = Math.max(area.x(r.high()), value + RADIUS);
+    String line = " stroke=\"currentColor\" stroke-width=\"1.6\"";
+    // Two halves, so that an open circle stays empty on any ground.
     svg.add(
-        "<path fill=\"none\" "
+        "<path fill=\"none\""
             + line
-            + " d=\"M"
-            + Svg.number(area.x(r.low()))
-            + " "
-            + Svg.number(y)
-            + "H"
-            + Svg.number(area.x(r.high()))
-            + "M"
-            + Svg.number(area.x(r.low()))
-            + " "
-            + Svg.number(y - 4)
-            + "v8M"
-            + Svg.number(area.x(r.high()))
-            + " "
-            + Svg.number(y - 4)
-            + "v8\"/>");
-    String fill = r.marker() == Marker.FILLED ? "currentColor" : "var(--paper,#fff)";
+            + " d=\""
+            + whisker(low, value - RADIUS, y)
+            + whisker(high, value + RADIUS, y)
+            + "\"/>");
+    String fill = r.marker() == Marker.FILLED ? "currentColor" : "none";
     svg.add(
         "<circle cx=\""
-            + Svg.number(area.x(r.value()))
+            + Svg.number(value)
             + "\" cy=\""
             + Svg.number(y)
-            + "\" r=\"4.5\" "
+            + "\" r=\""
+            + Svg.number(RADIUS)
+            + "\""
             + line
             + " fill=\""
             + fill
             + "\"/>");
+  }
+
+  private static String whisker(double end, double circle, double y) {
+    return "M"
+        + Svg.number(end)
+        + " "
+        + Svg.number(y - 4)
+        + "v8M"
+        + Svg.number(end)
+        + " "
+        + Svg.number(y)
+        + "H"
+        + Svg.number(circle);
   }
 }
