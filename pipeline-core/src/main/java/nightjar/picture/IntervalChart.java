@@ -39,6 +39,10 @@ public record IntervalChart(String title, String abscissa, List<Row> rows) {
    * @param marker how the dot is drawn
    */
   public record Row(String name, double value, double low, double high, Marker marker) {
+    private String label() {
+      return Svg.fit(name, LONGEST_NAME) + (isNumber() ? "" : " (no value)");
+    }
+
     private boolean isNumber() {
       return Double.isFinite(value) && Double.isFinite(low) && Double.isFinite(high);
     }
@@ -46,11 +50,7 @@ public record IntervalChart(String title, String abscissa, List<Row> rows) {
 
   /** The picture as one SVG element. */
   public String svg() {
-    double names =
-        rows.stream()
-            .mapToDouble(r -> Math.min(LONGEST_NAME, Svg.widthOf(r.name())))
-            .max()
-            .orElse(0);
+    double names = rows.stream().mapToDouble(r -> Svg.widthOf(r.label())).max().orElse(0);
     double left = names + 20;
     double bottom = 8 + ROW * rows.size();
     Svg svg = new Svg(title, WIDTH, bottom + FOOT);
@@ -85,9 +85,8 @@ public record IntervalChart(String title, String abscissa, List<Row> rows) {
   }
 
   private static void draw(Svg svg, PlotArea area, Row r, double y) {
-    svg.text(area.left() - 10, y + 4, "end", Svg.fit(r.name(), LONGEST_NAME));
+    svg.text(area.left() - 10, y + 4, "end", r.label());
     if (!r.isNumber()) {
-      svg.text(area.left() + 8, y + 4, "start", "no voxels");
       return;
     }
     double value = area.x(r.value());

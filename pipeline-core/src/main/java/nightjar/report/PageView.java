@@ -113,6 +113,13 @@ public final class PageView {
     return Words.fixed(value, decimals);
   }
 
+  /** The 95 % interval of a region. */
+  public String interval95(RegionContrast r) {
+    return Double.isFinite(r.lowPercent())
+        ? Words.fixed(r.lowPercent(), 2) + " to " + Words.fixed(r.highPercent(), 2)
+        : "–";
+  }
+
   /** A probability. */
   public String probability(double p) {
     return Words.probability(p);
@@ -184,9 +191,7 @@ public final class PageView {
       Curve lateral =
           timeline.curve(
               "lateral", timeline.meanMotion((t, u) -> motion.at(t, u).shiftLateralMillimetres()));
-      charts.add(
-          timeline.chart(
-              "Shifts", "shift (mm)", List.of(depth.ofCategory(2), lateral.ofCategory(3))));
+      charts.add(timeline.chart("Shifts", "shift (mm)", List.of(depth, lateral.ofCategory(3))));
       Curve rotation =
           timeline.curve("", timeline.meanMotion((t, u) -> motion.at(t, u).rotationDegrees()));
       charts.add(timeline.chart("Rotation", "rotation (°)", List.of(rotation)));
