@@ -9,9 +9,6 @@ import nightjar.recording.Mask;
 
 /** Every frame with its content where the reference has it. Close it to free the rows. */
 public final class AlignedFilm implements AutoCloseable {
-  /** A voxel whose content leaves the field in a larger share of the kept frames is lost. */
-  private static final double MOST_OUTSIDE = 0.05;
-
   private final FloatRows rows;
   private final FrameMotion motion;
   private final List<Slab> slabs;
@@ -40,15 +37,15 @@ public final class AlignedFilm implements AutoCloseable {
     return motion;
   }
 
-  /** The voxels whose content is in the field in at least 95 % of the kept frames. */
-  public Mask inField(KeptFrames kept) {
+  /** Per voxel, the number of kept frames in which its content lies outside the field. */
+  public int[] framesOutside(KeptFrames kept) {
     int[] outside = new int[voxels];
     for (int i = 0; i < kept.count(); i++) {
       for (int u = 0; u < slabs.size(); u++) {
         countOutside(kept.frame(i), u, outside);
       }
     }
-    return Mask.of(voxels, v -> outside[v] <= MOST_OUTSIDE * kept.count());
+    return outside;
   }
 
   /** Share of the voxels of {@code mask} whose content lies outside the field in a frame. */

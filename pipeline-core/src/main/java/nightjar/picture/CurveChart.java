@@ -38,7 +38,7 @@ public record CurveChart(
           "<path d=\""
               + CurvePath.line(c, area)
               + "\" fill=\"none\" stroke-linejoin=\"round\""
-              + " stroke-width=\"1.4\" stroke=\""
+              + " stroke-width=\"1.6\" stroke=\""
               + c.colour()
               + "\""
               + c.dashes()

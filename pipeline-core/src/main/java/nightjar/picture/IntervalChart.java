@@ -14,6 +14,7 @@ public record IntervalChart(String title, String abscissa, List<Row> rows) {
   private static final double WIDTH = 680;
   private static final double ROW = 24;
   private static final double FOOT = 40;
+  private static final double RADIUS = 4.5;
   private static final double LONGEST_NAME = 220;
 
   public IntervalChart {
@@ -38,6 +39,10 @@ public record IntervalChart(String title, String abscissa, List<Row> rows) {
    * @param marker how the dot is drawn
    */
   public record Row(String name, double value, double low, double high, Marker marker) {
+    private String label() {
+      return Svg.fit(name, LONGEST_NAME) + (isNumber() ? "" : " (no value)");
+    }
+
     private boolean isNumber() {
       return Double.isFinite(value) && Double.isFinite(low) && Double.isFinite(high);
     }
@@ -45,11 +50,7 @@ public record IntervalChart(String title, String abscissa, List<Row> rows) {
 
   /** The picture as one SVG element. */
   public String svg() {
-    double names =
-        rows.stream()
-            .mapToDouble(r -> Math.min(LONGEST_NAME, Svg.widthOf(r.name())))
-            .max()
-            .orElse(0);
+    double names = rows.stream().mapToDouble(r -> Svg.widthOf(r.label())).max().orElse(0);
     double left = names + 20;
     double bottom = 8 + ROW * rows.size();
     Svg svg = new Svg(title, WIDTH, bottom + FOOT);
@@ -84,40 +85,47 @@ public record IntervalChart(String title, String abscissa, List<Row> rows) {
   }
 
   private static void draw(Svg svg, PlotArea area, Row r, double y) {
-    svg.text(area.left() - 10, y + 4, "end", Svg.fit(r.name(), LONGEST_NAME));
+    svg.text(area.left() - 10, y + 4, "end", r.label());
     if (!r.isNumber()) {
-      svg.text(area.left() + 8, y + 4, "start", "no voxels");
       return;
     }
-    String line = "stroke=\"currentColor\" stroke-width=\"1.6\"";
+    double value = area.x(r.value());
+    double low = Math.min(area.x(r.low()), value - RADIUS);
+    double high = Math.max(area.x(r.high()), value + RADIUS);
+    String line = " stroke=\"currentColor\" stroke-width=\"1.6\"";
+    // Two halves, so that an open circle stays empty on any ground.
     svg.add(
-        "<path fill=\"none\" "
+        "<path fill=\"none\""
             + line
-            + " d=\"M"
-            + Svg.number(area.x(r.low()))
-            + " "
-            + Svg.number(y)
-            + "H"
-            + Svg.number(area.x(r.high()))
-            + "M"
-            + Svg.number(area.x(r.low()))
-            + " "
-            + Svg.number(y - 4)
-            + "v8M"
-            + Svg.number(area.x(r.high()))
-            + " "
-            + Svg.number(y - 4)
-            + "v8\"/>");
-    String fill = r.marker() == Marker.FILLED ? "currentColor" : "var(--paper,#fff)";
+            + " d=\""
+            + whisker(low, value - RADIUS, y)
+            + whisker(high, value + RADIUS, y)
+            + "\"/>");
+    String fill = r.marker() == Marker.FILLED ? "currentColor" : "none";
     svg.add(
         "<circle cx=\""
-            + Svg.number(area.x(r.value()))
+            + Svg.number(value)
             + "\" cy=\""
             + Svg.number(y)
-            + "\" r=\"4.5\" "
+            + "\" r=\""
+            + Svg.number(RADIUS)
+            + "\""
             + line
             + " fill=\""
             + fill
             + "\"/>");
+  }
+
+  private static String whisker(double end, double circle, double y) {
+    return "M"
+        + Svg.number(end)
+        + " "
+        + Svg.number(y - 4)
+        + "v8M"
+        + Svg.number(end)
+        + " "
+        + Svg.number(y)
+        + "H"
+        + Svg.number(circle);
   }
 }

@@ -8,7 +8,8 @@ import nightjar.recording.Mask;
 /** Draws one plane of a contact sheet. */
 final class PlanePanel {
   private static final double TICK = 4;
-  private static final double PIXELS_A_TICK = 48;
+  private static final double DEPTH_TICKS = 28;
+  private static final double LATERAL_TICKS = 46;
 
   private final Svg svg;
   private final SheetLayout layout;
@@ -115,7 +116,7 @@ final class PlanePanel {
   }
 
   private void depthAxis() {
-    NiceTicks ticks = ticks(grid.depths(), layout.panelHeight());
+    NiceTicks ticks = ticks(grid.depths(), layout.panelHeight() / DEPTH_TICKS);
     for (double mm : ticks.values()) {
       double y = top + share(grid.depths(), mm) * layout.panelHeight();
       svg.line(left - TICK, y, left, y, 1);
@@ -126,7 +127,7 @@ final class PlanePanel {
 
   private void lateralAxis() {
     double bottom = top + layout.panelHeight();
-    NiceTicks ticks = ticks(grid.laterals(), layout.panelWidth());
+    NiceTicks ticks = ticks(grid.laterals(), layout.panelWidth() / LATERAL_TICKS);
     for (double mm : ticks.values()) {
       double x = left + share(grid.laterals(), mm) * layout.panelWidth();
       svg.line(x, bottom, x, bottom + TICK, 1);
@@ -135,12 +136,11 @@ final class PlanePanel {
     svg.text(left + layout.panelWidth() / 2, bottom + TICK + 27, "middle", "lateral (mm)");
   }
 
-  private NiceTicks ticks(Axis axis, double pixels) {
+  private NiceTicks ticks(Axis axis, double most) {
     double half = SheetLayout.spacing(axis, grid) / 2;
     double a = axis.at(0);
     double b = axis.at(axis.size() - 1);
-    int most = Math.max(2, (int) (pixels / PIXELS_A_TICK));
-    return NiceTicks.between(Math.min(a, b) - half, Math.max(a, b) + half, most);
+    return NiceTicks.between(Math.min(a, b) - half, Math.max(a, b) + half, Math.max(2, (int) most));
   }
 
   /** Where a coordinate lies between the outer edges of the first and the last voxel, 0 to 1. */
@@ -153,7 +153,7 @@ final class PlanePanel {
 
   private void scaleBar() {
     double extent = SheetLayout.extent(grid.laterals(), grid);
-    NiceTicks ticks = NiceTicks.between(0, extent, 5);
+    NiceTicks ticks = NiceTicks.between(0, extent, 9);
     double length = ticks.step() / extent * layout.panelWidth();
     double x = left + layout.panelWidth() - length - 8;
     double y = top + layout.panelHeight() - 9;

@@ -62,7 +62,8 @@ record SheetLayout(int columns, double panelWidth, double panelHeight, boolean h
 
   /** Upper edge of plane {@code p}. */
   double top(int p) {
-    return p / columns * rowHeight() + (headed ? HEAD : 6);
+    int row = p / columns;
+    return row * rowHeight() + (headed ? HEAD : 6);
   }
 
   /** Right edge of the planes. */

@@ -1,4 +1,7 @@
-/** The report page and the methods text. May use results, picture, plan and the stages. */
+/**
+ * The report page and the methods text: takes finished facts, computes nothing but counts. May use
+ * picture, plan, results and the stages.
+ */
 @NullMarked
 package nightjar.report;
 

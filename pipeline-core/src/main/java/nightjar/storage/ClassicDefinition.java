@@ -19,12 +19,14 @@ final class ClassicDefinition {
   private static final int DIMENSIONS = 10;
   private static final int VARIABLES = 11;
   private static final int ATTRIBUTES = 12;
-  private static final int CHARACTERS = 2;
 
   /** External types. */
   enum Type {
     BYTE(1, 1),
+    CHAR(2, 1),
     SHORT(3, 2),
+    INT(4, 4),
+    FLOAT(5, 4),
     DOUBLE(6, 8);
 
     private final int code;
@@ -40,11 +42,11 @@ final class ClassicDefinition {
       String name, List<String> dimensions, Type type, Map<String, Object> attributes) {}
 
   private final Map<String, Integer> dimensions = new LinkedHashMap<>();
-  private final Map<String, String> global;
+  private final Map<String, ?> global;
   private final List<Variable> variables = new ArrayList<>();
 
   /** A file with the given global attributes. */
-  ClassicDefinition(Map<String, String> global) {
+  ClassicDefinition(Map<String, ?> global) {
     this.global = new LinkedHashMap<>(global);
   }
 
@@ -53,7 +55,7 @@ final class ClassicDefinition {
   }
 
   /**
-   * @param attributes text, one Short or Double, or a byte[]; in order
+   * @param attributes text, one Short, Integer, Float or Double, or a byte[]; in order
    */
   void variable(
       String name, List<String> dimensionNames, Type type, Map<String, Object> attributes) {
@@ -143,7 +145,7 @@ final class ClassicDefinition {
       name(out, a.getKey());
       if (a.getValue() instanceof String t) {
         byte[] text = t.getBytes(StandardCharsets.UTF_8);
-        out.writeInt(CHARACTERS);
+        out.writeInt(Type.CHAR.code);
         out.writeInt(text.length);
         padded(out, text);
       } else if (a.getValue() instanceof byte[] b) {
@@ -155,6 +157,14 @@ final class ClassicDefinition {
         out.writeInt(1);
         out.writeShort(s);
         out.writeShort(0);
+      } else if (a.getValue() instanceof Integer n) {
+        out.writeInt(Type.INT.code);
+        out.writeInt(1);
+        out.writeInt(n);
+      } else if (a.getValue() instanceof Float f) {
+        out.writeInt(Type.FLOAT.code);
+        out.writeInt(1);
+        out.writeFloat(f);
       } else if (a.getValue() instanceof Double d) {
         out.writeInt(Type.DOUBLE.code);
         out.writeInt(1);
