@@ -152,6 +152,19 @@ class ChartsTest {
   }
 
   @Test
+  void aLongNameKeepsBothEnds() {
+    assertEquals("barre…left", Svg.fit("barrel_cortex_of_the_left", 64));
+    assertEquals("barrel", Svg.fit("barrel", 64));
+  }
+
+  @Test
+  void longTickLabelsPushTheAxisInwards() {
+    Curve tiny = Curve.of("", upTo(3), new double[] {-1e-7, 0, 1e-7});
+    PlotArea area = PlotArea.of(FRAME, List.of(tiny), List.of(), 0, 0);
+    assertTrue(area.left() > Svg.widthOf("\u22120.0000001") + 20, "left " + area.left());
+  }
+
+  @Test
   void controlCharactersDoNotReachTheXml() {
     assertEquals("a\uFFFDb", Svg.escape("a\u0000b"));
   }
