@@ -11,7 +11,7 @@ final class PlanePanel {
   // Panels narrower than this have no room for words.
   private static final double SMALL = 80;
   private static final double DEPTH_TICKS = 28;
-  private static final double LATERAL_TICKS = 46;
+  private static final double LATERAL_TICKS = 38;
 
   private final Svg svg;
   private final SheetLayout layout;

@@ -80,8 +80,13 @@ class ChartsTest {
 
   @Test
   void curvesOfDifferentThingsDifferInMoreThanColour() {
-    Curve one = Curve.of("a", upTo(2), upTo(2)).ofCategory(0);
-    assertFalse(one.dashes().equals(one.ofCategory(1).dashes()));
+    Curve one = Curve.of("a", upTo(2), upTo(2));
+    List<String> looks =
+        IntStream.range(0, 32)
+            .mapToObj(i -> one.ofCategory(i).colour() + one.ofCategory(i).dashes())
+            .toList();
+    assertEquals(32, looks.stream().distinct().count());
+    assertFalse(one.ofCategory(0).dashes().equals(one.ofCategory(1).dashes()));
   }
 
   @Test
