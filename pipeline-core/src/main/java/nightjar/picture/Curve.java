@@ -74,7 +74,9 @@ public final class Curve {
 
   /** So that lines differ in more than colour. */
   String dashes() {
-    String d = category == INK ? "" : DASHES[category % DASHES.length];
+    // Shifted by one a round of colours: no two of 32 curves look alike.
+    int round = category / Palette.CATEGORIES;
+    String d = category == INK ? "" : DASHES[(category + round) % DASHES.length];
     return d.isEmpty() ? "" : " stroke-dasharray=\"" + d + "\"";
   }
 }

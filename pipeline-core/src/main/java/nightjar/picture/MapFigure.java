@@ -84,9 +84,12 @@ public final class MapFigure {
       panel.image(overlay::pixel);
     }
     for (int r = 0; r < regions.regions().size(); r++) {
-      panel.region(regions.regions().get(r).voxels(), Palette.category(r));
+      panel.region(regions.regions().get(r).voxels(), r);
     }
     outlines.forEach(panel::outline);
+    for (int r = 0; r < regions.regions().size(); r++) {
+      panel.number(regions.regions().get(r).voxels(), r);
+    }
     panel.axes();
   }
 }

@@ -47,7 +47,7 @@ final class MapLegend {
     for (int r = 0; r < regions.regions().size(); r++) {
       String name = regions.regions().get(r).name();
       svg.box(left, y, 12, 12, "fill=\"none\" stroke-width=\"2\" stroke=\"" + colour(r) + "\"");
-      svg.text(left + 20, y + 10, "start", Svg.fit(name, WIDTH - 24));
+      svg.text(left + 20, y + 10, "start", Svg.fit((r + 1) + "  " + name, WIDTH - 24));
       y += LINE;
     }
   }

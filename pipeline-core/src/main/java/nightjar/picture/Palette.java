@@ -18,6 +18,9 @@ public final class Palette {
     0x1b9e77, 0xd95f02, 0x7570b3, 0xe7298a, 0x66a61e, 0xe6ab02, 0xa6761d, 0x666666
   };
 
+  /** How many named things differ in colour. */
+  static final int CATEGORIES = DARK2.length;
+
   private Palette() {}
 
   /**

@@ -8,8 +8,10 @@ import nightjar.recording.Mask;
 /** Draws one plane of a contact sheet. */
 final class PlanePanel {
   private static final double TICK = 4;
+  // Panels narrower than this have no room for words.
+  private static final double SMALL = 80;
   private static final double DEPTH_TICKS = 28;
-  private static final double LATERAL_TICKS = 46;
+  private static final double LATERAL_TICKS = 38;
 
   private final Svg svg;
   private final SheetLayout layout;
@@ -47,11 +49,45 @@ final class PlanePanel {
     path(path, "stroke=\"#000\" stroke-width=\"1.1\"" + dashes);
   }
 
-  /** The outline of a region. */
-  void region(Mask voxels, int rgb) {
+  /** The outline of the {@code i}th region, from 0. */
+  void region(Mask voxels, int i) {
     String path = boundary(voxels);
     path(path, "stroke=\"#fff\" stroke-opacity=\"0.7\" stroke-width=\"3\"");
-    path(path, "stroke=\"" + Palette.css(rgb) + "\" stroke-width=\"1.8\"");
+    path(path, "stroke=\"" + Palette.css(Palette.category(i)) + "\" stroke-width=\"1.8\"");
+  }
+
+  /** The number of the {@code i}th region at its middle, from 1: colours alone do not tell it. */
+  void number(Mask voxels, int i) {
+    double x = 0;
+    double z = 0;
+    int n = 0;
+    for (int v = plane * grid.planeVoxels(); v < (plane + 1) * grid.planeVoxels(); v++) {
+      if (voxels.contains(v)) {
+        x += grid.lateralOf(v) + 0.5;
+        z += grid.depthOf(v) + 0.5;
+        n++;
+      }
+    }
+    if (n > 0 && layout.panelWidth() >= SMALL) {
+      double right = x / n / grid.laterals().size() * layout.panelWidth();
+      double down = z / n / grid.depths().size() * layout.panelHeight();
+      onPicture(left + right, top + down + 4, "middle", Integer.toString(i + 1));
+    }
+  }
+
+  /** White letters in a black rim. */
+  private void onPicture(double x, double y, String anchor, String words) {
+    svg.add(
+        "<text x=\""
+            + Svg.number(x)
+            + "\" y=\""
+            + Svg.number(y)
+            + "\" text-anchor=\""
+            + anchor
+            + "\" fill=\"#fff\" stroke=\"#000\" stroke-width=\"3\" stroke-linejoin=\"round\""
+            + " paint-order=\"stroke\">"
+            + words
+            + "</text>");
   }
 
   private String boundary(Mask voxels) {
@@ -102,7 +138,7 @@ final class PlanePanel {
     if (layout.atBottom(plane, grid.planes().size())) {
       lateralAxis();
     }
-    if (plane == 0) {
+    if (plane == 0 && Math.min(layout.panelWidth(), layout.panelHeight()) >= SMALL / 2) {
       scaleBar();
     }
   }
@@ -122,7 +158,10 @@ final class PlanePanel {
       svg.line(left - TICK, y, left, y, 1);
       svg.text(left - TICK - 3, y + 4, "end", ticks.label(mm));
     }
-    svg.textUpwards(left - 38, top + layout.panelHeight() / 2, "depth (mm)");
+    svg.textUpwards(
+        left - 38,
+        top + layout.panelHeight() / 2,
+        layout.panelHeight() < SMALL - 15 ? "mm" : "depth (mm)");
   }
 
   private void lateralAxis() {
@@ -133,7 +172,8 @@ final class PlanePanel {
       svg.line(x, bottom, x, bottom + TICK, 1);
       svg.text(x, bottom + TICK + 12, "middle", ticks.label(mm));
     }
-    svg.text(left + layout.panelWidth() / 2, bottom + TICK + 27, "middle", "lateral (mm)");
+    String name = layout.panelWidth() < SMALL ? "mm" : "lateral (mm)";
+    svg.text(left + layout.panelWidth() / 2, bottom + TICK + 27, "middle", name);
   }
 
   private NiceTicks ticks(Axis axis, double most) {
@@ -159,14 +199,6 @@ final class PlanePanel {
     double y = top + layout.panelHeight() - 9;
     svg.box(x - 1, y - 1, length + 2, 5, "fill=\"#000\" fill-opacity=\"0.8\"");
     svg.box(x, y, length, 3, "fill=\"#fff\"");
-    svg.add(
-        "<text x=\""
-            + Svg.number(x + length)
-            + "\" y=\""
-            + Svg.number(y - 5)
-            + "\" text-anchor=\"end\" fill=\"#fff\" stroke=\"#000\" stroke-width=\"3\""
-            + " stroke-linejoin=\"round\" paint-order=\"stroke\">"
-            + ticks.label(ticks.step())
-            + " mm</text>");
+    onPicture(x + length, y - 5, "end", ticks.label(ticks.step()) + " mm");
   }
 }

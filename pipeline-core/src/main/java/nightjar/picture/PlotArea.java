@@ -16,6 +16,8 @@ record PlotArea(
     double left, double right, double top, double bottom, Range horizontal, Range vertical) {
   private static final double GUTTER = 62;
   private static final double FOOT = 38;
+  private static final double TICK_WIDTH = 70;
+  private static final double TICK_HEIGHT = 28;
 
   /** Two different finite ends. */
   record Range(double low, double high) {
@@ -49,13 +51,20 @@ record PlotArea(
       spans.forEach(s -> x.take(s.from()));
       spans.forEach(s -> x.take(s.to()));
     }
+    double top = above + lanes + 8;
+    double bottom = above + frame.height() - FOOT;
+    Range vertical = y.range().widened(0.06);
+    double labels = widest(ticks(vertical, bottom - top, TICK_HEIGHT));
     return new PlotArea(
-        GUTTER,
-        frame.width() - 12,
-        above + lanes + 8,
-        above + frame.height() - FOOT,
-        x.range(),
-        y.range().widened(0.06));
+        Math.max(GUTTER, labels + 34), frame.width() - 12, top, bottom, x.range(), vertical);
+  }
+
+  private static double widest(NiceTicks ticks) {
+    return ticks.values().stream().mapToDouble(v -> Svg.widthOf(ticks.label(v))).max().orElse(0);
+  }
+
+  private static NiceTicks ticks(Range range, double pixels, double each) {
+    return NiceTicks.between(range.low(), range.high(), Math.max(2, (int) (pixels / each)));
   }
 
   private static final class Ends {
@@ -85,13 +94,12 @@ record PlotArea(
 
   /** Frame lines, ticks and names of the axes. */
   void axes(Svg svg, ChartFrame frame) {
-    NiceTicks across =
-        NiceTicks.between(horizontal.low(), horizontal.high(), most(right - left, 70));
+    NiceTicks across = ticks(horizontal, right - left, TICK_WIDTH);
     for (double v : across.values()) {
       svg.line(x(v), bottom, x(v), bottom + 4, 1);
       svg.text(x(v), bottom + 16, "middle", across.label(v));
     }
-    NiceTicks up = NiceTicks.between(vertical.low(), vertical.high(), most(bottom - top, 28));
+    NiceTicks up = ticks(vertical, bottom - top, TICK_HEIGHT);
     for (double v : up.values()) {
       svg.line(left, y(v), right, y(v), v == 0 ? 0.5 : 0.13);
       svg.text(left - 6, y(v) + 4, "end", up.label(v));
@@ -99,9 +107,5 @@ record PlotArea(
     svg.line(left, bottom, right, bottom, 1);
     svg.text((left + right) / 2, bottom + 32, "middle", frame.abscissa());
     svg.textUpwards(13, (top + bottom) / 2, Svg.fit(frame.ordinate(), bottom - top + 40));
-  }
-
-  private static int most(double pixels, double each) {
-    return Math.max(2, (int) (pixels / each));
   }
 }

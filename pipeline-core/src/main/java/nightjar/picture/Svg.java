@@ -140,10 +140,13 @@ final class Svg {
     return safe.toString();
   }
 
-  /** The text, or its beginning and an ellipsis, so that it fits into {@code pixels}. */
+  /** The text, or its two ends around an ellipsis, so that it fits into {@code pixels}. */
   static String fit(String text, double pixels) {
-    int letters = Math.max(2, (int) (pixels / LETTER_WIDTH));
-    return text.length() <= letters ? text : text.substring(0, letters - 1) + "…";
+    int letters = Math.max(3, (int) (pixels / LETTER_WIDTH));
+    int end = (letters - 1) / 2;
+    return text.length() <= letters
+        ? text
+        : text.substring(0, letters - 1 - end) + "…" + text.substring(text.length() - end);
   }
 
   /** About how many pixels a text takes. */

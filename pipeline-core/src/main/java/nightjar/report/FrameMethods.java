@@ -74,11 +74,11 @@ final class FrameMethods {
                 + " and the change "
                 + Words.plain(s.minChangeRatio())
                 + " times its median"
-            : "Frames were not judged by their power. They were rejected only by place and"
-                + " completeness";
+                + "; further"
+            : "Frames were not judged by their power. Rejected were";
     return "Screening. "
         + power
-        + "; further those displaced more than "
+        + " those displaced more than "
         + Words.plain(s.maxDisplacementMillimetres())
         + " mm from the median position, and those with more than half of the mask missing or outside"
         + " the field. A frame rejected in one plane is rejected in all; rejected frames are left out"

@@ -104,18 +104,6 @@ final class TestMethods {
         + v.trials()
         + "; variance inflation "
         + Words.plain(v.varianceInflation())
-        + "; correlation of motion with a stimulus "
-        + Words.plain(v.motionR())
-        + "; change of an effect by motion columns "
-        + Words.plain(v.effectChange())
-        + "; sham check: share of voxels with p < 0.05 from "
-        + Words.plain(v.shamP05Low())
-        + " to "
-        + Words.plain(v.shamP05High())
-        + ", with p < 0.001 up to "
-        + Words.plain(v.shamP001())
-        + ", shams with any discovery up to "
-        + Words.plain(v.shamDiscoveries())
         + "; coverage "
         + Words.plain(v.coverage())
         + ".";

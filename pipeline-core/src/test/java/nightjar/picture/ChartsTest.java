@@ -80,8 +80,13 @@ class ChartsTest {
 
   @Test
   void curvesOfDifferentThingsDifferInMoreThanColour() {
-    Curve one = Curve.of("a", upTo(2), upTo(2)).ofCategory(0);
-    assertFalse(one.dashes().equals(one.ofCategory(1).dashes()));
+    Curve one = Curve.of("a", upTo(2), upTo(2));
+    List<String> looks =
+        IntStream.range(0, 32)
+            .mapToObj(i -> one.ofCategory(i).colour() + one.ofCategory(i).dashes())
+            .toList();
+    assertEquals(32, looks.stream().distinct().count());
+    assertFalse(one.ofCategory(0).dashes().equals(one.ofCategory(1).dashes()));
   }
 
   @Test
@@ -149,6 +154,19 @@ class ChartsTest {
     assertEquals("12.34", Svg.number(12.341));
     assertEquals("1234567.05", Svg.number(1234567.05));
     assertThrows(IllegalArgumentException.class, () -> Svg.number(Double.NaN));
+  }
+
+  @Test
+  void aLongNameKeepsBothEnds() {
+    assertEquals("barre…left", Svg.fit("barrel_cortex_of_the_left", 64));
+    assertEquals("barrel", Svg.fit("barrel", 64));
+  }
+
+  @Test
+  void longTickLabelsPushTheAxisInwards() {
+    Curve tiny = Curve.of("", upTo(3), new double[] {-1e-7, 0, 1e-7});
+    PlotArea area = PlotArea.of(FRAME, List.of(tiny), List.of(), 0, 0);
+    assertTrue(area.left() > Svg.widthOf("\u22120.0000001") + 20, "left " + area.left());
   }
 
   @Test

@@ -124,6 +124,20 @@ class MapFigureTest {
   }
 
   @Test
+  void regionsCarryTheNumberOfTheirLineInTheLegend() {
+    Grid g = grid(1, 30, 30);
+    RegionLabels two =
+        new RegionLabels(
+            List.of(
+                new Region("empty", Mask.of(900, v -> false)),
+                new Region("middle", Mask.of(900, v -> v > 400 && v < 500))));
+    String svg = MapFigure.ofPower("map", g, filled(g, 1)).withRegions(two).svg();
+    assertTrue(svg.contains("paint-order=\"stroke\">2</text>"));
+    assertFalse(svg.contains("paint-order=\"stroke\">1</text>"));
+    assertTrue(svg.contains("2  middle"));
+  }
+
+  @Test
   void hostileNamesStayText() {
     Grid g = grid(2, 3, 3);
     String hostile = "<script>alert('\"&')</script>";
