@@ -68,7 +68,8 @@ class CubicSplineTest {
     int n = 64;
     float[] values = new float[n * n];
     for (int v = 0; v < values.length; v++) {
-      values[v] = (float) wave(v / n, v % n);
+      int z = v / n;
+      values[v] = (float) wave(z, v % n);
     }
     CubicSpline spline = new CubicSpline(1, n, n);
     spline.fit(values, 0);
