@@ -24,7 +24,7 @@ public final class Alignment {
   /** Voxels around the provisional mask that are compared too: the edge of the brain holds well. */
   private static final int MARGIN_VOXELS = 3;
 
-  private static final int FRAMES_A_BLOCK = 8;
+  private static final int FRAMES_A_BLOCK = 16;
 
   private Alignment() {}
 

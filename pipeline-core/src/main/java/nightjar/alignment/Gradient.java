@@ -5,6 +5,9 @@ import java.util.stream.IntStream;
 
 /** How a reference image changes with each parameter of motion, by differences of neighbours. */
 final class Gradient {
+  /** Planes from which on the outermost ones, with derivatives to one side only, are left out. */
+  private static final int THICK = 5;
+
   private final Slab slab;
   private final float[] image;
 
@@ -15,7 +18,7 @@ final class Gradient {
 
   /**
    * The voxels of {@code chosen} that have a value, and neighbours with a value on both sides in
-   * depth and lateral.
+   * depth and lateral; of a thick volume only those between planes.
    */
   int[] voxels(IntPredicate chosen) {
     return IntStream.range(0, slab.voxels()).filter(chosen).filter(this::isKnown).toArray();
@@ -24,11 +27,17 @@ final class Gradient {
   private boolean isKnown(int v) {
     int z = v / slab.laterals() % slab.depths();
     int x = v % slab.laterals();
-    return z > 0
+    return (slab.planes() < THICK || isBetweenPlanes(v))
+        && z > 0
         && z < slab.depths() - 1
         && x > 0
         && x < slab.laterals() - 1
         && !Double.isNaN(image[v] + byDepth(v) + byLateral(v) + byPlane(v));
+  }
+
+  private boolean isBetweenPlanes(int v) {
+    int size = slab.depths() * slab.laterals();
+    return v >= size && v < image.length - size;
   }
 
   /** Change of the image at the content of voxel {@code v} per mm or radian of displacement. */

@@ -50,8 +50,8 @@ final class Pose {
         s[2],
         s[0],
         Math.toDegrees(Math.atan2(r[7], r[4])),
-        Math.toDegrees(-Math.asin(Math.max(-1, Math.min(1, r[1])))),
-        Math.toDegrees(Math.atan2(-r[2], r[0])));
+        Math.toDegrees(Math.asin(Math.max(-1, Math.min(1, 0 - r[1])))),
+        Math.toDegrees(Math.atan2(0 - r[2], r[0])));
   }
 
   /** This displacement after the inverse of {@code first}. */
