@@ -36,8 +36,8 @@ public final class CsvFile {
 
   static String text(@Nullable Object cell) {
     if (cell == null
-        || cell instanceof Double d && d.isNaN()
-        || cell instanceof Float f && f.isNaN()) {
+        || (cell instanceof Double d && d.isNaN())
+        || (cell instanceof Float f && f.isNaN())) {
       return "";
     }
     if (cell instanceof Boolean b) {
