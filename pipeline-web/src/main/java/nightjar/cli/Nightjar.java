@@ -56,7 +56,7 @@ public final class Nightjar implements Runnable {
 
   private static int refuseArguments(ParameterException e, String[] arguments) {
     CommandLine command = e.getCommandLine();
-    String sentence = e.getMessage().strip().replaceAll("\\s*[\\r\\n]+\\s*", " ");
+    String sentence = String.valueOf(e.getMessage()).strip().replaceAll("\\s*[\\r\\n]+\\s*", " ");
     command
         .getErr()
         .println(
