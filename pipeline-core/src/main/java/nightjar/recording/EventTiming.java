@@ -18,6 +18,9 @@ public final class EventTiming {
   /** More outside than this share and the fault is the table's, not a trial's. */
   private static final double MOST_OUTSIDE = 0.1;
 
+  /** Onsets are logged to about a millisecond, and binary fractions add to that. */
+  private static final double LOGGED_TO_SECONDS = 1e-3;
+
   private final EventTable events;
   private final String recordingName;
   private final double first;
@@ -31,7 +34,8 @@ public final class EventTiming {
     this.recordingName = recordingName;
     this.first = times.at(0);
     this.last = times.at(times.size() - 1);
-    this.beginning = Math.max(first - times.intervalSeconds() / 2, Math.min(first, 0));
+    double opens = first - times.intervalSeconds() / 2 - LOGGED_TO_SECONDS;
+    this.beginning = Math.max(opens, Math.min(first, 0));
   }
 
   /**
