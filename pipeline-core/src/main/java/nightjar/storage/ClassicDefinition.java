@@ -36,6 +36,11 @@ final class ClassicDefinition {
       this.code = code;
       this.bytes = bytes;
     }
+
+    /** Bytes of one value. */
+    int bytes() {
+      return bytes;
+    }
   }
 
   private record Variable(
@@ -50,17 +55,35 @@ final class ClassicDefinition {
     this.global = new LinkedHashMap<>(global);
   }
 
+  /** Adds a dimension of at least one: zero would be the length of a record dimension. */
   void dimension(String name, int size) {
-    dimensions.put(name, size);
+    if (size < 1 || dimensions.putIfAbsent(name, size) != null) {
+      throw new IllegalArgumentException(
+          "dimension " + name + " = " + size + " after " + dimensions);
+    }
   }
 
   /**
-   * @param attributes text, one Short, Integer, Float or Double, or a byte[]; in order
+   * Adds a variable.
+   *
+   * @param attributes values as {@link ClassicAttribute#of} takes them, in order
    */
   void variable(
       String name, List<String> dimensionNames, Type type, Map<String, Object> attributes) {
+    if (variables.stream().anyMatch(v -> v.name.equals(name))) {
+      throw new IllegalArgumentException("two variables " + name);
+    }
     variables.add(
         new Variable(name, List.copyOf(dimensionNames), type, new LinkedHashMap<>(attributes)));
+  }
+
+  /** Number of values that a variable over these dimensions holds. */
+  long values(List<String> dimensionNames) {
+    long values = 1;
+    for (String d : dimensionNames) {
+      values = Math.multiplyExact(values, (long) size(d));
+    }
+    return values;
   }
 
   /** The header's bytes; the first variable's data follow at once. */
@@ -83,6 +106,7 @@ final class ClassicDefinition {
       listHead(out, VARIABLES, variables.size());
       long begin = firstBegin;
       for (Variable v : variables) {
+        checkSize(v);
         variable(out, v, begin);
         begin += paddedBytes(v);
       }
@@ -107,11 +131,16 @@ final class ClassicDefinition {
   }
 
   private long paddedBytes(Variable v) {
-    long values = 1;
-    for (String d : v.dimensions) {
-      values *= size(d);
+    return (values(v.dimensions) * v.type.bytes + 3) / 4 * 4;
+  }
+
+  /** In this variant at most the last variable may have 4 GiB or more. */
+  private void checkSize(Variable v) {
+    boolean isLast = v.name.equals(variables.get(variables.size() - 1).name);
+    if (!isLast && paddedBytes(v) > 0xFFFFFFFCL) {
+      throw new IllegalArgumentException(
+          v.name + " of " + paddedBytes(v) + " bytes is not the last variable");
     }
-    return (values * v.type.bytes + 3) / 4 * 4;
   }
 
   private int size(String dimension) {
@@ -142,36 +171,11 @@ final class ClassicDefinition {
       throws IOException {
     listHead(out, ATTRIBUTES, attributes.size());
     for (Map.Entry<String, ?> a : attributes.entrySet()) {
+      ClassicAttribute value = ClassicAttribute.of(a.getKey(), a.getValue());
       name(out, a.getKey());
-      if (a.getValue() instanceof String t) {
-        byte[] text = t.getBytes(StandardCharsets.UTF_8);
-        out.writeInt(Type.CHAR.code);
-        out.writeInt(text.length);
-        padded(out, text);
-      } else if (a.getValue() instanceof byte[] b) {
-        out.writeInt(Type.BYTE.code);
-        out.writeInt(b.length);
-        padded(out, b);
-      } else if (a.getValue() instanceof Short s) {
-        out.writeInt(Type.SHORT.code);
-        out.writeInt(1);
-        out.writeShort(s);
-        out.writeShort(0);
-      } else if (a.getValue() instanceof Integer n) {
-        out.writeInt(Type.INT.code);
-        out.writeInt(1);
-        out.writeInt(n);
-      } else if (a.getValue() instanceof Float f) {
-        out.writeInt(Type.FLOAT.code);
-        out.writeInt(1);
-        out.writeFloat(f);
-      } else if (a.getValue() instanceof Double d) {
-        out.writeInt(Type.DOUBLE.code);
-        out.writeInt(1);
-        out.writeDouble(d);
-      } else {
-        throw new IllegalArgumentException("attribute " + a.getKey() + " = " + a.getValue());
-      }
+      out.writeInt(value.type().code);
+      out.writeInt(value.count());
+      padded(out, value.bytes());
     }
   }
 }

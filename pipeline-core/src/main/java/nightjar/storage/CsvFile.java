@@ -13,7 +13,7 @@ import org.jspecify.annotations.Nullable;
 
 /**
  * Writes a neutral table as comma-separated text: UTF-8, LF, '.' decimal, the shortest digits that
- * give the number back, missing = empty field.
+ * give the number back, missing = empty field, quotation marks where RFC 4180 needs them.
  */
 public final class CsvFile {
   private static final CSVFormat FORMAT =
@@ -21,12 +21,19 @@ public final class CsvFile {
 
   private CsvFile() {}
 
-  /** Writes {@code table} to {@code file}, replacing it. */
+  /**
+   * Writes {@code table} to {@code file}, replacing it.
+   *
+   * @throws IllegalArgumentException if a row is not as long as the header
+   */
   public static void write(Path file, Table table) {
     try (BufferedWriter out = Files.newBufferedWriter(file);
         CSVPrinter csv = new CSVPrinter(out, FORMAT)) {
       csv.printRecord(table.columns());
       for (List<@Nullable Object> row : table.rows()) {
+        if (row.size() != table.columns().size()) {
+          throw new IllegalArgumentException(row + " under the header " + table.columns());
+        }
         csv.printRecord(row.stream().map(CsvFile::text));
       }
     } catch (IOException e) {
@@ -34,18 +41,16 @@ public final class CsvFile {
     }
   }
 
-  static String text(@Nullable Object cell) {
-    if (cell == null
-        || (cell instanceof Double d && d.isNaN())
-        || (cell instanceof Float f && f.isNaN())) {
-      return "";
-    }
-    if (cell instanceof Boolean b) {
+  /** Null for an empty field: an empty text would be put in quotation marks at a line's start. */
+  private static @Nullable String text(@Nullable Object cell) {
+    if (cell == null || cell.equals("")) {
+      return null;
+    } else if (cell instanceof Boolean b) {
       return b ? "1" : "0";
-    }
-    if (cell instanceof Double || cell instanceof Float) {
-      String s = cell.toString();
-      return s.endsWith(".0") ? s.substring(0, s.length() - 2) : s;
+    } else if (cell instanceof Double d) {
+      return d.isNaN() ? null : ShortestDecimal.of(d);
+    } else if (cell instanceof Float f) {
+      return f.isNaN() ? null : ShortestDecimal.of(f);
     }
     return cell.toString();
   }

@@ -1,11 +1,9 @@
 package nightjar.storage;
 
-import java.io.BufferedOutputStream;
-import java.io.DataOutputStream;
 import java.io.IOException;
 import java.io.UncheckedIOException;
+import java.lang.reflect.Array;
 import java.nio.charset.StandardCharsets;
-import java.nio.file.Files;
 import java.nio.file.Path;
 import java.util.ArrayList;
 import java.util.LinkedHashMap;
@@ -16,13 +14,15 @@ import nightjar.recording.Grid;
 import nightjar.recording.GridVariable;
 
 /**
- * Writes variables on a recording's grid as NetCDF of the 64-bit offset variant, readable by any
- * NetCDF tool; the same input gives the same bytes. Coordinates are in mm; NaN is written as {@code
- * _FillValue}, the format's own default.
+ * Writes variables on a recording's grid as NetCDF of the 64-bit offset variant [NetCDF Classic
+ * Format Specification, Unidata], readable by any NetCDF tool; the same input gives the same bytes.
+ * Coordinates are in mm; NaN is written as {@code _FillValue}, the format's own default.
  */
 public final class GridFile {
+  /** The default fill value of doubles; rounded to a float, that of floats. */
   private static final double FILL = 9.969209968386869e36;
-  private static final List<String> SPACE = List.of("plane", "depth", "lateral");
+
+  private static final String PLANE = "plane";
 
   private final Grid grid;
   private final List<GridVariable> variables;
@@ -35,9 +35,12 @@ public final class GridFile {
   /**
    * Writes a file, replacing one of the same name.
    *
-   * @param dimensions sizes of the dimensions besides the spatial ones
-   * @param variables their dimension {@code plane} is left out where the grid has no plane axis
-   * @param attributes of the file: text or numbers
+   * @param dimensions sizes of the dimensions besides the spatial ones, at least 1
+   * @param variables their dimension {@code plane} is left out where the grid has no plane axis; a
+   *     list of names gets a further dimension {@code <variable>_length}
+   * @param attributes of the file: text, numbers or double[]
+   * @throws IllegalArgumentException if a variable's values are not as many as its dimensions say,
+   *     it names an unknown dimension, or a name is there twice
    */
   public static void write(
       Path file,
@@ -46,11 +49,15 @@ public final class GridFile {
       List<GridVariable> variables,
       Map<String, Object> attributes) {
     GridFile f = new GridFile(grid, variables);
-    ClassicDefinition definition = f.definition(dimensions, attributes);
-    try (DataOutputStream out =
-        new DataOutputStream(new BufferedOutputStream(Files.newOutputStream(file), 1 << 16))) {
-      out.write(definition.bytes());
-      f.data(out);
+    byte[] header = f.definition(dimensions, attributes).bytes();
+    try (ValueWriter out = new ValueWriter(file)) {
+      out.bytes(header);
+      for (Axis axis : f.axes().values()) {
+        out.doubles(axis.toArray(), FILL);
+      }
+      for (GridVariable v : variables) {
+        write(v, out);
+      }
     } catch (IOException e) {
       throw new UncheckedIOException(e);
     }
@@ -63,16 +70,16 @@ public final class GridFile {
     axes().forEach((name, axis) -> d.dimension(name, axis.size()));
     for (GridVariable v : variables) {
       if (v.values() instanceof List<?> names) {
-        d.dimension(v.name() + "_length", longest(names));
+        d.dimension(lengthName(v), width(names));
       }
     }
     axes()
-        .forEach(
-            (name, axis) ->
-                d.variable(
-                    name, List.of(name), ClassicDefinition.Type.DOUBLE, Map.of("units", "mm")));
+        .keySet()
+        .forEach(n -> d.variable(n, List.of(n), ClassicDefinition.Type.DOUBLE, axisAttributes(n)));
     for (GridVariable v : variables) {
-      d.variable(v.name(), dimensions(v), type(v), attributes(v));
+      ClassicDefinition.Type type = type(v);
+      checkLength(v, d);
+      d.variable(v.name(), storedDimensions(v), type, storedAttributes(v));
     }
     return d;
   }
@@ -80,30 +87,50 @@ public final class GridFile {
   private Map<String, Axis> axes() {
     Map<String, Axis> axes = new LinkedHashMap<>();
     if (grid.hasPlaneAxis()) {
-      axes.put("plane", grid.planes());
+      axes.put(PLANE, grid.planes());
     }
     axes.put("depth", grid.depths());
     axes.put("lateral", grid.laterals());
     return axes;
   }
 
-  private List<String> dimensions(GridVariable v) {
-    List<String> names = new ArrayList<>(v.dimensions());
-    if (!grid.hasPlaneAxis()) {
-      names.remove(SPACE.get(0));
+  /** The letters of {@code axis} and the direction are those of the CF conventions. */
+  private static Map<String, Object> axisAttributes(String name) {
+    Map<String, Object> a = new LinkedHashMap<>();
+    a.put("units", "mm");
+    switch (name) {
+      case PLANE -> a.put("axis", "Y");
+      case "depth" -> {
+        a.put("axis", "Z");
+        a.put("positive", "down");
+      }
+      default -> a.put("axis", "X");
     }
+    return a;
+  }
+
+  private List<String> dimensions(GridVariable v) {
+    return v.dimensions().stream().filter(d -> grid.hasPlaneAxis() || !d.equals(PLANE)).toList();
+  }
+
+  private List<String> storedDimensions(GridVariable v) {
+    List<String> names = new ArrayList<>(dimensions(v));
     if (v.values() instanceof List) {
-      names.add(v.name() + "_length");
+      names.add(lengthName(v));
     }
     return names;
   }
 
-  private static int longest(List<?> names) {
-    return names.stream().mapToInt(n -> utf8(n).length).max().orElse(1);
+  private static String lengthName(GridVariable v) {
+    return v.name() + "_length";
   }
 
-  private static byte[] utf8(Object name) {
-    return String.valueOf(name).getBytes(StandardCharsets.UTF_8);
+  private void checkLength(GridVariable v, ClassicDefinition d) {
+    int length = v.values() instanceof List<?> names ? names.size() : Array.getLength(v.values());
+    if (length != d.values(dimensions(v))) {
+      throw new IllegalArgumentException(
+          v.name() + " has " + length + " values over " + dimensions(v));
+    }
   }
 
   private static ClassicDefinition.Type type(GridVariable v) {
@@ -121,7 +148,7 @@ public final class GridFile {
     throw new IllegalArgumentException(v.name() + " holds " + v.values().getClass());
   }
 
-  private static Map<String, Object> attributes(GridVariable v) {
+  private static Map<String, Object> storedAttributes(GridVariable v) {
     Map<String, Object> a = new LinkedHashMap<>(v.attributes());
     if (v.values() instanceof float[]) {
       a.put("_FillValue", (float) FILL);
@@ -131,45 +158,36 @@ public final class GridFile {
     return a;
   }
 
-  private void data(DataOutputStream out) throws IOException {
-    for (Axis axis : axes().values()) {
-      for (int i = 0; i < axis.size(); i++) {
-        out.writeDouble(axis.at(i));
-      }
-    }
-    for (GridVariable v : variables) {
-      values(out, v);
-    }
-  }
-
-  private static void values(DataOutputStream out, GridVariable v) throws IOException {
+  private static void write(GridVariable v, ValueWriter out) throws IOException {
     if (v.values() instanceof float[] values) {
-      for (float x : values) {
-        out.writeFloat(Float.isNaN(x) ? (float) FILL : x);
-      }
+      out.floats(values, (float) FILL);
     } else if (v.values() instanceof double[] values) {
-      for (double x : values) {
-        out.writeDouble(Double.isNaN(x) ? FILL : x);
-      }
+      out.doubles(values, FILL);
     } else if (v.values() instanceof int[] values) {
-      for (int x : values) {
-        out.writeInt(x);
-      }
+      out.ints(values);
     } else if (v.values() instanceof byte[] values) {
-      padded(out, values);
+      out.bytes(values);
     } else if (v.values() instanceof List<?> names) {
-      int width = longest(names);
-      byte[] all = new byte[names.size() * width];
-      for (int i = 0; i < names.size(); i++) {
-        byte[] text = utf8(names.get(i));
-        System.arraycopy(text, 0, all, i * width, text.length);
-      }
-      padded(out, all);
+      out.bytes(characters(names));
     }
   }
 
-  private static void padded(DataOutputStream out, byte[] bytes) throws IOException {
-    out.write(bytes);
-    out.write(new byte[(4 - bytes.length % 4) % 4]);
+  /** Names of fixed width, filled up with zeros. */
+  private static byte[] characters(List<?> names) {
+    int width = width(names);
+    byte[] all = new byte[names.size() * width];
+    for (int i = 0; i < names.size(); i++) {
+      byte[] text = utf8(names.get(i));
+      System.arraycopy(text, 0, all, i * width, text.length);
+    }
+    return all;
+  }
+
+  private static int width(List<?> names) {
+    return Math.max(1, names.stream().mapToInt(n -> utf8(n).length).max().orElse(1));
+  }
+
+  private static byte[] utf8(Object name) {
+    return String.valueOf(name).getBytes(StandardCharsets.UTF_8);
   }
 }
