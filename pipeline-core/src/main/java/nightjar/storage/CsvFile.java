@@ -12,8 +12,9 @@ import org.apache.commons.csv.CSVPrinter;
 import org.jspecify.annotations.Nullable;
 
 /**
- * Writes a neutral table as comma-separated text: UTF-8, LF, '.' decimal, the shortest digits that
- * give the number back, missing = empty field, quotation marks where RFC 4180 needs them.
+ * Writes a neutral table as comma-separated text: UTF-8, LF, '.' decimal, numbers rounded to the
+ * fewest digits that read back as the same number, missing = empty field, quotation marks where RFC
+ * 4180 needs them.
  */
 public final class CsvFile {
   private static final CSVFormat FORMAT =

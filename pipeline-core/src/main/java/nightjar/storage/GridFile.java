@@ -38,7 +38,8 @@ public final class GridFile {
    * @param dimensions sizes of the dimensions besides the spatial ones, at least 1
    * @param variables their dimension {@code plane} is left out where the grid has no plane axis; a
    *     list of names gets a further dimension {@code <variable>_length}
-   * @param attributes of the file: text, numbers or double[]
+   * @param attributes of the file: text, numbers or double[], stored in the map's order (that of
+   *     {@code Map.of} changes from run to run)
    * @throws IllegalArgumentException if a variable's values are not as many as its dimensions say,
    *     it names an unknown dimension, or a name is there twice
    */

@@ -8,7 +8,8 @@ import java.math.MathContext;
  * digits of {@link Double#toString(double)} differ between versions of Java; these do not.
  *
  * <p>Any decimal of 15 digits survives a double (6 a float) and 17 digits (9) tell all doubles
- * (floats) apart [IEEE 754-2019, 5.12.2], so a few tries are enough.
+ * (floats) apart [IEEE 754-2019, 5.12.2], so a few tries are enough. At a power of two a text one
+ * digit shorter may read back that is not the rounded value; it is not used.
  */
 final class ShortestDecimal {
   private static final int LONGEST_PLAIN = 16;
