@@ -9,13 +9,16 @@ import nightjar.design.DesignMatrix;
 import nightjar.design.DesignRequest;
 import nightjar.design.MotionColumns;
 import nightjar.design.SessionDesign;
+import nightjar.film.FloatRows;
 import nightjar.glm.Glm;
 import nightjar.glm.GlmFit;
 import nightjar.glm.LinearModel;
 import nightjar.inference.AdjustedTests;
 import nightjar.mask.Smoothing;
 import nightjar.plan.Plan;
+import nightjar.recording.Grid;
 import nightjar.recording.KeptFrames;
+import nightjar.recording.Mask;
 import nightjar.recording.Progress;
 import nightjar.recording.VoxelOrder;
 import nightjar.results.MapFindings;
@@ -56,7 +59,7 @@ record FittedModel(
             ? Glm.fitWithSmoothedCorrelation(
                 film.series().rows(),
                 parts,
-                smoothing(session, film.series().order()),
+                smoothing(session, film.series().order(), machine),
                 machine.workers(),
                 progress)
             : Glm.fit(film.series().rows(), parts, machine.workers(), progress);
@@ -86,9 +89,29 @@ record FittedModel(
     return parts;
   }
 
-  private static UnaryOperator<double[]> smoothing(OpenedSession session, VoxelOrder order) {
+  private static UnaryOperator<double[]> smoothing(
+      OpenedSession session, VoxelOrder order, Machine machine) {
     double width = session.plan().noise().smoothingMillimetres();
-    return q -> Smoothing.smooth(q, order, session.recording().grid(), width);
+    Grid grid = session.recording().grid();
+    return q -> {
+      float[] image = new float[q.length];
+      for (int k = 0; k < image.length; k++) {
+        image[k] = (float) q[k];
+      }
+      image = order.spread(image, Float.NaN);
+      float[] spread = image;
+      try (FloatRows one = machine.scratch().allocate(1, image.length)) {
+        one.write(0, 0, image.length, image, 0);
+        Mask mask = Mask.of(image.length, v -> !Float.isNaN(spread[v]));
+        Smoothing.smooth(one, grid, mask, width, machine.workers());
+        one.read(0, 0, image.length, image, 0);
+      }
+      double[] smooth = new double[q.length];
+      for (int k = 0; k < smooth.length; k++) {
+        smooth[k] = image[order.voxel(k)];
+      }
+      return smooth;
+    };
   }
 
   /** The maps' part of the results. */

@@ -6,9 +6,12 @@ import nightjar.alignment.AlignedFilm;
 import nightjar.alignment.Alignment;
 import nightjar.alignment.ReferenceFrames;
 import nightjar.design.DesignColumn;
+import nightjar.design.DesignMatrix;
 import nightjar.design.SessionDesign;
 import nightjar.film.PercentSeries;
 import nightjar.mask.FinalMask;
+import nightjar.mask.KeptFilm;
+import nightjar.mask.MaskSource;
 import nightjar.mask.PowerMask;
 import nightjar.mask.SeriesScaling;
 import nightjar.mask.Smoothing;
@@ -19,7 +22,6 @@ import nightjar.recording.KeptFrames;
 import nightjar.recording.Mask;
 import nightjar.recording.NamedSeries;
 import nightjar.recording.Progress;
-import nightjar.refusal.RefusedInput;
 import nightjar.results.MeanPower;
 import nightjar.results.Warning;
 import nightjar.screening.FrameJudgement;
@@ -46,7 +48,6 @@ record PreparedFilm(
     List<Warning> warnings)
     implements AutoCloseable {
   private static final int TYPICAL_FRAMES = 31;
-  private static final int FRAMES_A_BLOCK = 64;
 
   /** Runs the stages; the aligned film is freed before this returns. */
   static PreparedFilm of(OpenedSession session, Machine machine) {
@@ -54,12 +55,11 @@ record PreparedFilm(
     Grid grid = recording.grid();
     GrossPass gross =
         GrossPass.over(
-            recording,
             recording.fileName(),
-            machine.scratch(),
+            recording,
             machine.workers(),
             machine.stages().begin("reading", StageShares.READING));
-    Mask provisional = PowerMask.of(gross.medianImage(), grid, gross.medianPower());
+    Mask provisional = PowerMask.provisional(gross.medianImage(), grid, gross.medianPower());
     ReferenceFrames reference =
         new ReferenceFrames(gross.typicalFrames(TYPICAL_FRAMES), provisional, gross.medianPower());
     try (AlignedFilm film =
@@ -79,17 +79,6 @@ record PreparedFilm(
       OpenedSession session, AlignedFilm film, ReferenceFrames reference, Machine machine) {
     Progress progress = machine.stages().begin("screening", StageShares.SCREENING);
     RecordingFile recording = session.recording();
-    double[] outside = new double[recording.times().size()];
-    machine
-        .workers()
-        .forEachBlock(
-            outside.length,
-            FRAMES_A_BLOCK,
-            (first, end) -> {
-              for (int t = first; t < end; t++) {
-                outside[t] = film.outsideShare(t, reference.provisionalMask());
-              }
-            });
     SessionDesign responses =
         SessionDesign.build(
             EarlyDesignCheck.request(session.plan(), session.stimuli()),
@@ -102,21 +91,14 @@ record PreparedFilm(
             recording.times(),
             reference.provisionalMask(),
             film.motion(),
-            t -> outside[t],
-            p -> stimuli(responses, p),
+            film::isOutsideField,
+            responses.planes().stream().map(PreparedFilm::stimuli).toList(),
             reference.medianPower());
-    FrameJudgement judgement =
-        Screening.judge(input, session.plan().screening(), machine.workers(), progress);
-    if (judgement.kept().count() == 0) {
-      throw RefusedInput.because("every frame was rejected")
-          .in(recording.fileName())
-          .remedy("look at the recording, or set screening: {enabled: false} in the plan");
-    }
-    return judgement;
+    return Screening.judge(input, session.plan().screening(), machine.workers(), progress);
   }
 
-  private static List<NamedSeries> stimuli(SessionDesign design, int plane) {
-    return design.ofPlane(plane).columns().stream()
+  private static List<NamedSeries> stimuli(DesignMatrix design) {
+    return design.columns().stream()
         .filter(DesignColumn::isOfStimulus)
         .map(
             c ->
@@ -134,34 +116,21 @@ record PreparedFilm(
     Progress progress = machine.stages().begin("scaling to percent", StageShares.SCALING);
     Plan plan = session.plan();
     RecordingFile recording = session.recording();
-    KeptFrames kept = judgement.kept();
+    KeptFilm keptFilm =
+        new KeptFilm(recording.fileName(), film.rows(), recording.grid(), judgement.kept());
     FinalMask mask =
         FinalMask.of(
-            film.rows(),
-            kept,
-            film.framesOutside(kept),
-            new FinalMask.Source(
-                recording.fileName(),
-                recording.grid(),
-                plan.mask(),
-                recording.brainMask(),
-                medianPower),
+            keptFilm,
+            new MaskSource(plan.mask(), recording.brainMask().orElse(null), medianPower),
+            film::isOutsideField,
             machine.workers(),
             share -> progress.report(share / 2));
-    if (plan.smoothingMillimetres() > 0) {
-      Smoothing.smooth(
-          film.rows(),
-          kept,
-          recording.grid(),
-          mask.mask(),
-          plan.smoothingMillimetres(),
-          machine.workers());
-    }
+    Smoothing.smooth(
+        film.rows(), recording.grid(), mask.mask(), plan.smoothingMillimetres(), machine.workers());
     PercentSeries series =
         SeriesScaling.scale(
-            film.rows(),
+            keptFilm,
             mask.mask(),
-            kept,
             plan.scale(),
             machine.scratch(),
             machine.workers(),
@@ -169,9 +138,9 @@ record PreparedFilm(
     return new PreparedFilm(
         film.motion(),
         judgement,
-        new MeanPower(mask.meanPower()),
+        MeanPower.of(recording.grid().voxels(), mask::meanPower),
         series,
-        mask.leftOut().stream().map(s -> new Warning("mask", s)).toList());
+        MaskWarnings.of(mask.leftOut()));
   }
 
   @Override

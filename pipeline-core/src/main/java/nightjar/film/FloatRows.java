@@ -2,7 +2,7 @@ package nightjar.film;
 
 /**
  * Rows of float32 of equal width, one row a frame. Rows may be read by several threads at once;
- * different rows may be written by several threads at once.
+ * different values may be written by several threads at once.
  */
 public abstract sealed class FloatRows implements AutoCloseable permits HeapRows, MappedRows {
   private final int rows;

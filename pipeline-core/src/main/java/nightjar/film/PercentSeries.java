@@ -4,49 +4,61 @@ import nightjar.recording.KeptFrames;
 import nightjar.recording.VoxelOrder;
 
 /**
- * The series that the model is fitted to: one row a kept frame, one column a mask voxel, percent of
- * the voxel's baseline. Close it to free the rows.
+ * What the model is fitted to: kept frames by mask voxels, percent of each voxel's baseline. Owns
+ * its rows. May be read by several threads at once.
  */
 public final class PercentSeries implements AutoCloseable {
   private final FloatRows rows;
   private final VoxelOrder order;
   private final KeptFrames kept;
-  private final double[] baselines;
+  private final double[] baseline;
 
   /**
-   * @param rows owned from now on
-   * @param baselines mean power of each voxel over the kept frames; shared, not copied
+   * @param rows {@code kept.count()} rows of {@code order.size()} values, percent
+   * @param order the mask's voxels
+   * @param kept the frames that the rows stand for
+   * @param baseline power per mask voxel, in the recording's unit; copied
    */
-  public PercentSeries(FloatRows rows, VoxelOrder order, KeptFrames kept, double[] baselines) {
-    if (rows.rows() != kept.count() || rows.width() != order.size()) {
+  public PercentSeries(FloatRows rows, VoxelOrder order, KeptFrames kept, double[] baseline) {
+    if (rows.rows() != kept.count()
+        || rows.width() != order.size()
+        || baseline.length != order.size()) {
       throw new IllegalArgumentException(
-          "%d x %d values for %d frames and %d voxels"
-              .formatted(rows.rows(), rows.width(), kept.count(), order.size()));
+          rows.rows()
+              + " x "
+              + rows.width()
+              + " values and "
+              + baseline.length
+              + " baselines for "
+              + kept.count()
+              + " frames x "
+              + order.size()
+              + " voxels");
     }
     this.rows = rows;
     this.order = order;
     this.kept = kept;
-    this.baselines = baselines;
+    this.baseline = baseline.clone();
   }
 
-  /** Kept frames by mask voxels, percent; no NaN. */
+  /** {@code [kept frame][mask voxel]}, percent. */
   public FloatRows rows() {
     return rows;
   }
 
-  /** The mask's voxels. */
+  /** The mask's voxels: position in a row to voxel of the grid. */
   public VoxelOrder order() {
     return order;
   }
 
-  /** The frames of the rows. */
+  /** The frames that the rows stand for. */
   public KeptFrames kept() {
     return kept;
   }
 
-  /** Baseline power of position {@code k}. */
+  /** Mean power over the kept frames of position {@code k}, in the recording's unit. */
   public double baseline(int k) {
-    return baselines[k];
+    return baseline[k];
   }
 
   @Override

@@ -1,162 +1,165 @@
 package nightjar.mask;
 
-import java.util.ArrayList;
+import java.util.Arrays;
 import java.util.EnumMap;
-import java.util.List;
 import java.util.Map;
-import java.util.Optional;
-import nightjar.film.FloatRows;
+import java.util.stream.IntStream;
+import nightjar.numeric.FlooredLog;
 import nightjar.numeric.Workers;
 import nightjar.recording.Grid;
-import nightjar.recording.KeptFrames;
 import nightjar.recording.Mask;
+import nightjar.recording.OutsideField;
 import nightjar.recording.Progress;
 import nightjar.refusal.RefusedInput;
+import org.jspecify.annotations.Nullable;
 
 /**
- * The voxels that are analysed (numerics section 4), found once from the kept frames of the aligned
- * film. Immutable.
+ * The voxels to be analysed, decided once from the kept frames of the aligned film (numerics
+ * section 4). Immutable.
  */
 public final class FinalMask {
-  /** A voxel whose content leaves the field in a larger share of the kept frames is left out. */
-  private static final double MOST_OUTSIDE = 0.05;
+  /** A voxel outside the field in a larger share of the kept frames leaves the mask. */
+  public static final double LARGEST_SHARE_OUTSIDE = 0.05;
 
   private final Mask mask;
-  private final float[] meanPower;
-  private final List<String> leftOut;
+  private final double[] meanPower;
+  private final LeftOut leftOut;
 
-  private FinalMask(Mask mask, float[] meanPower, List<String> leftOut) {
+  private FinalMask(Mask mask, double[] meanPower, LeftOut leftOut) {
     this.mask = mask;
     this.meanPower = meanPower;
-    this.leftOut = List.copyOf(leftOut);
+    this.leftOut = leftOut;
   }
 
   /**
-   * What the mask is made from.
+   * Takes the voxels of the source and leaves out those that cannot be fitted: outside the field in
+   * over 5 % of the kept frames, without a value that the recording should have in a kept frame,
+   * without a positive baseline, or without variance. A voxel outside the field in fewer kept
+   * frames stays; there its value is filled in by the nearest kept one in time.
    *
-   * @param recordingName for messages
-   * @param grid of the recording
-   * @param settings where voxels come from
-   * @param brainMask the recording's own, where it has one
-   * @param medianPower of the whole recording; positive
-   */
-  public record Source(
-      String recordingName,
-      Grid grid,
-      MaskSettings settings,
-      Optional<Mask> brainMask,
-      double medianPower) {}
-
-  /**
-   * Finds the mask.
-   *
-   * @param film aligned, every frame by every voxel; NaN where missing or outside the field
-   * @param framesOutside per voxel, the number of kept frames in which its content was outside the
-   *     field; not modified
-   * @throws RefusedInput where the recording lacks the mask that the plan names, or none is left
+   * @param film its rows are modified where values are filled in
+   * @param outside tells for a missing value whether displacement is the cause
+   * @throws RefusedInput where no frame was kept, the recording lacks the brain mask that the plan
+   *     asks for, or no voxel is left
    */
   public static FinalMask of(
-      FloatRows film,
-      KeptFrames kept,
-      int[] framesOutside,
-      Source source,
-      Workers workers,
-      Progress progress) {
-    FilmMoments moments = FilmMoments.of(film, kept, workers, progress);
-    float[] mean = new float[film.width()];
-    for (int v = 0; v < mean.length; v++) {
-      mean[v] = (float) moments.mean(v);
+      KeptFilm film, MaskSource source, OutsideField outside, Workers workers, Progress progress) {
+    if (film.kept().count() == 0) {
+      throw RefusedInput.because("no frame was kept")
+          .in(film.recordingName())
+          .remedy("look at the recording, or widen the limits of the plan's screening");
     }
-    Mask candidates = candidates(source, mean);
-    Map<Cause, Integer> counts = new EnumMap<>(Cause.class);
-    Mask mask =
-        Mask.of(
-            candidates.size(),
-            v -> {
-              if (!candidates.contains(v)) {
-                return false;
-              }
-              Optional<Cause> cause = cause(moments, v, framesOutside[v], kept.count());
-              cause.ifPresent(c -> counts.merge(c, 1, Integer::sum));
-              return cause.isEmpty();
-            });
-    List<String> leftOut = sentences(counts);
+    VoxelTally tally = VoxelTally.of(film, outside, workers, progress);
+    double[] mean = new double[tally.sum.length];
+    Arrays.setAll(mean, v -> tally.sum[v] / tally.values[v]);
+    Mask start = start(film, source, mean);
+    int frames = film.kept().count();
+    int[] filled =
+        IntStream.range(0, mean.length)
+            .filter(v -> start.contains(v) && judge(tally, v, frames) == null)
+            .filter(v -> tally.outside[v] > 0)
+            .toArray();
+    EdgeFilling.fill(film, filled, tally.sum, workers);
+    for (int v : filled) {
+      mean[v] = tally.sum[v] / frames;
+    }
+    Mask mask = Mask.of(mean.length, v -> start.contains(v) && judge(tally, v, frames) == null);
+    LeftOut left = count(tally, start, frames);
     if (mask.count() == 0) {
-      throw RefusedInput.because("no voxel is left to analyse")
-          .in(source.recordingName())
-          .found(candidates.count() + " candidates; " + String.join(" ", leftOut).replace(".", ""))
-          .remedy("look at the recording, or name another mask source in the plan");
+      throw empty(film, start, left);
     }
-    return new FinalMask(mask, mean, leftOut);
+    return new FinalMask(mask, mean, left);
   }
 
-  private static Mask candidates(Source source, float[] mean) {
-    return switch (source.settings()) {
-      case AUTO -> PowerMask.of(mean, source.grid(), source.medianPower());
-      case ALL -> Mask.all(mean.length);
-      case RECORDING ->
-          source
-              .brainMask()
-              .orElseThrow(
-                  () ->
-                      RefusedInput.because("the recording has no variable brain_mask")
-                          .in(source.recordingName())
-                          .remedy("set mask: {source: auto} in the plan or add the variable"));
+  private static Mask start(KeptFilm film, MaskSource source, double[] mean) {
+    Grid grid = film.grid();
+    return switch (source.setting()) {
+      case AUTO -> PowerMask.of(mean, grid, FlooredLog.ofMedianPower(source.medianPower()));
+      case ALL -> Mask.all(grid.voxels());
+      case RECORDING -> recordingMask(film, source.recordingMask());
     };
   }
 
-  /** Why a voxel leaves the mask. */
+  private static Mask recordingMask(KeptFilm film, @Nullable Mask given) {
+    if (given == null) {
+      throw RefusedInput.because("the plan takes the mask from the recording, which has none")
+          .in(film.recordingName())
+          .at("variable brain_mask")
+          .remedy("add the variable, or set the plan's mask source to auto or all");
+    }
+    if (given.size() != film.grid().voxels()) {
+      throw new IllegalArgumentException(
+          given.size() + " voxels of a mask on a grid of " + film.grid().voxels());
+    }
+    return given;
+  }
+
   private enum Cause {
-    MISSING("a missing value in a kept frame"),
-    OUTSIDE("their content outside the field in over 5 % of the kept frames"),
-    NOT_POSITIVE("a baseline that is not positive"),
-    CONSTANT("a constant value");
-
-    private final String words;
-
-    Cause(String words) {
-      this.words = words;
-    }
+    LEFT_FIELD,
+    MISSING_VALUE,
+    NON_POSITIVE_BASELINE,
+    NO_VARIANCE
   }
 
-  private static Optional<Cause> cause(FilmMoments m, int v, int outside, int frames) {
-    if (outside > MOST_OUTSIDE * frames) {
-      return Optional.of(Cause.OUTSIDE);
+  private static @Nullable Cause judge(VoxelTally tally, int v, int frames) {
+    if (tally.outside[v] > LARGEST_SHARE_OUTSIDE * frames) {
+      return Cause.LEFT_FIELD;
     }
-    if (m.missing(v) > outside) {
-      return Optional.of(Cause.MISSING);
+    if (tally.values[v] + tally.outside[v] < frames || tally.values[v] == 0) {
+      return Cause.MISSING_VALUE;
     }
-    if (!(m.mean(v) > 0)) {
-      return Optional.of(Cause.NOT_POSITIVE);
+    if (!(tally.sum[v] > 0)) {
+      return Cause.NON_POSITIVE_BASELINE;
     }
-    return m.isConstant(v) ? Optional.of(Cause.CONSTANT) : Optional.empty();
+    return tally.smallest[v] == tally.largest[v] ? Cause.NO_VARIANCE : null;
   }
 
-  private static List<String> sentences(Map<Cause, Integer> counts) {
-    List<String> s = new ArrayList<>();
-    counts.forEach(
-        (cause, n) ->
-            s.add(
-                n
-                    + (n == 1 ? " voxel of the mask was" : " voxels of the mask were")
-                    + " left out for "
-                    + cause.words
-                    + "."));
-    return s;
+  private static LeftOut count(VoxelTally tally, Mask start, int frames) {
+    Map<Cause, Integer> n = new EnumMap<>(Cause.class);
+    for (int v = 0; v < start.size(); v++) {
+      Cause cause = start.contains(v) ? judge(tally, v, frames) : null;
+      if (cause != null) {
+        n.merge(cause, 1, Integer::sum);
+      }
+    }
+    return new LeftOut(
+        n.getOrDefault(Cause.LEFT_FIELD, 0),
+        n.getOrDefault(Cause.MISSING_VALUE, 0),
+        n.getOrDefault(Cause.NON_POSITIVE_BASELINE, 0),
+        n.getOrDefault(Cause.NO_VARIANCE, 0));
   }
 
-  /** The voxels. */
+  private static RefusedInput empty(KeptFilm film, Mask start, LeftOut left) {
+    return RefusedInput.because("no voxel is left to analyse")
+        .in(film.recordingName())
+        .found(
+            String.format(
+                "%d voxels in the mask's source, of which %d left the field, %d miss a value, %d"
+                    + " have no positive mean, %d never change",
+                start.count(),
+                left.leftField(),
+                left.missingValue(),
+                left.nonPositiveBaseline(),
+                left.noVariance()))
+        .remedy("check the recording's values, or set the plan's mask source to all");
+  }
+
+  /** The voxels to be analysed; at least one. */
   public Mask mask() {
     return mask;
   }
 
-  /** Mean power over the kept frames, one a voxel of the grid; shared, not copied. */
-  public float[] meanPower() {
-    return meanPower;
+  /**
+   * Mean power over the kept frames of voxel {@code v} of the grid, in the mask or not, values
+   * filled in included; NaN where it never has one. In the mask this is the baseline of the film as
+   * it stands, before any smoothing.
+   */
+  public double meanPower(int v) {
+    return meanPower[v];
   }
 
-  /** How many voxels were left out, and why; sentences. */
-  public List<String> leftOut() {
+  /** How many voxels of the source left, and why. */
+  public LeftOut leftOut() {
     return leftOut;
   }
 }

@@ -1,119 +1,113 @@
 package nightjar.mask;
 
-import java.util.concurrent.atomic.AtomicLong;
 import nightjar.film.FloatRows;
 import nightjar.film.PercentSeries;
 import nightjar.film.Scratch;
 import nightjar.numeric.Workers;
-import nightjar.recording.KeptFrames;
 import nightjar.recording.Mask;
 import nightjar.recording.Progress;
 import nightjar.recording.VoxelOrder;
 import nightjar.refusal.RefusedInput;
 
 /**
- * From power to percent of each voxel's baseline, the mean b over kept frames (numerics section 5):
- * 100 (y/b - 1) or 100 ln(y/b). A value whose content was outside the field takes the voxel's value
- * of the kept frame before.
+ * From power to percent of each voxel's baseline (numerics section 5). Two passes over the film.
  */
 public final class SeriesScaling {
-  private static final int VOXELS_A_BLOCK = 1024;
+  private static final int FRAMES_A_BLOCK = 32;
 
-  private final FloatRows film;
-  private final VoxelOrder order;
-  private final KeptFrames kept;
-  private final Scale scale;
-  private final FloatRows out;
-  private final double[] baselines;
-
-  private SeriesScaling(
-      FloatRows film, VoxelOrder order, KeptFrames kept, Scale scale, FloatRows out) {
-    this.film = film;
-    this.order = order;
-    this.kept = kept;
-    this.scale = scale;
-    this.out = out;
-    this.baselines = new double[order.size()];
-  }
+  private SeriesScaling() {}
 
   /**
-   * Scales the mask's voxels.
+   * Scales the kept frames: {@code 100 (y/b - 1)} or {@code 100 ln(y/b)}, b the mean over kept
+   * frames.
    *
-   * @param film aligned, every frame by every voxel; not modified
-   * @throws RefusedInput where logarithms are wanted and the mask holds values that are not
-   *     positive
+   * @param film not modified; no value is missing in the mask
+   * @param mask a final mask
+   * @return owned by the caller
+   * @throws RefusedInput where the scale takes logarithms and the mask holds a value that is not
+   *     positive, or the scratch folder is too small
+   * @throws IllegalArgumentException where a mask voxel has no positive baseline
    */
   public static PercentSeries scale(
-      FloatRows film,
-      Mask mask,
-      KeptFrames kept,
-      Scale scale,
-      Scratch scratch,
-      Workers workers,
-      Progress progress) {
+      KeptFilm film, Mask mask, Scale scale, Scratch scratch, Workers workers, Progress progress) {
     VoxelOrder order = mask.order();
-    FloatRows out = scratch.allocate(kept.count(), order.size());
-    SeriesScaling s = new SeriesScaling(film, order, kept, scale, out);
-    AtomicLong done = new AtomicLong();
+    double[] baseline = baseline(film, order, workers, share -> progress.report(share / 2));
+    FloatRows rows = scratch.allocate(film.kept().count(), order.size());
     try {
       workers.forEachBlock(
-          order.size(),
-          VOXELS_A_BLOCK,
+          rows.rows(),
+          FRAMES_A_BLOCK,
+          share -> progress.report((1 + share) / 2),
           (first, end) -> {
-            s.block(first, end);
-            progress.report((double) done.addAndGet(end - first) / order.size());
+            float[] frame = new float[film.film().width()];
+            float[] series = new float[order.size()];
+            for (int r = first; r < end; r++) {
+              film.film().read(film.kept().frame(r), 0, frame.length, frame, 0);
+              gather(frame, order, series);
+              switch (scale) {
+                case PERCENT -> percent(series, baseline);
+                case LOG_PERCENT -> logPercent(series, baseline, film, order, r);
+              }
+              rows.write(r, 0, series.length, series, 0);
+            }
           });
+      return new PercentSeries(rows, order, film.kept(), baseline);
     } catch (RuntimeException e) {
-      out.close();
+      rows.close();
       throw e;
     }
-    return new PercentSeries(out, order, kept, s.baselines);
   }
 
-  private void block(int first, int end) {
-    int from = order.voxel(first);
-    float[] row = new float[order.voxel(end - 1) - from + 1];
-    int[] at = new int[end - first];
-    for (int k = 0; k < at.length; k++) {
-      at[k] = order.voxel(first + k) - from;
-    }
-    double[] sum = new double[at.length];
-    int[] count = new int[at.length];
-    for (int i = 0; i < kept.count(); i++) {
-      film.read(kept.frame(i), from, row.length, row, 0);
-      for (int k = 0; k < at.length; k++) {
-        float y = row[at[k]];
-        if (!Float.isNaN(y)) {
-          sum[k] += y;
-          count[k]++;
-        }
-      }
-    }
-    for (int k = 0; k < at.length; k++) {
-      baselines[first + k] = sum[k] / count[k];
-    }
-    float[] scaled = new float[at.length];
-    for (int i = 0; i < kept.count(); i++) {
-      film.read(kept.frame(i), from, row.length, row, 0);
-      for (int k = 0; k < at.length; k++) {
-        float y = row[at[k]];
-        if (!Float.isNaN(y)) {
-          scaled[k] = percent(y, baselines[first + k]);
-        }
-      }
-      out.write(i, first, scaled.length, scaled, 0);
+  private static double[] baseline(
+      KeptFilm film, VoxelOrder order, Workers workers, Progress progress) {
+    double[] mean = new double[order.size()];
+    workers.forEachBlock(
+        film.film().width(),
+        VoxelTally.TILE,
+        progress,
+        (first, end) -> {
+          int from = order.firstAtOrAfter(first);
+          int to = order.firstAtOrAfter(end);
+          float[] row = new float[end - first];
+          for (int r = 0; r < film.kept().count(); r++) {
+            film.film().read(film.kept().frame(r), first, row.length, row, 0);
+            for (int k = from; k < to; k++) {
+              mean[k] += row[order.voxel(k) - first];
+            }
+          }
+          for (int k = from; k < to; k++) {
+            mean[k] /= film.kept().count();
+            if (!(mean[k] > 0)) {
+              throw new IllegalArgumentException(
+                  "baseline " + mean[k] + " of mask voxel " + order.voxel(k));
+            }
+          }
+        });
+    return mean;
+  }
+
+  private static void gather(float[] frame, VoxelOrder order, float[] series) {
+    for (int k = 0; k < series.length; k++) {
+      series[k] = frame[order.voxel(k)];
     }
   }
 
-  private float percent(float y, double baseline) {
-    if (scale == Scale.PERCENT) {
-      return (float) (100 * (y / baseline - 1));
+  private static void percent(float[] y, double[] b) {
+    for (int k = 0; k < y.length; k++) {
+      y[k] = (float) (100 * (y[k] / b[k] - 1));
     }
-    if (!(y > 0)) {
-      throw RefusedInput.because("the plan takes logarithms, and the mask holds power of " + y)
-          .at("scale log_percent")
-          .remedy("use scale: percent or a mask without such voxels");
+  }
+
+  private static void logPercent(float[] y, double[] b, KeptFilm film, VoxelOrder order, int row) {
+    for (int k = 0; k < y.length; k++) {
+      if (!(y[k] > 0)) {
+        throw RefusedInput.because("log_percent needs positive power in the mask")
+            .in(film.recordingName())
+            .at("frame " + film.kept().frame(row) + ", " + film.place(order.voxel(k)))
+            .found(y[k])
+            .remedy("set the plan's scale to percent");
+      }
+      y[k] = (float) (100 * Math.log(y[k] / b[k]));
     }
-    return (float) (100 * Math.log(y / baseline));
   }
 }

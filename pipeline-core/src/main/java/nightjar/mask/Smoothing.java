@@ -4,129 +4,110 @@ import nightjar.film.FloatRows;
 import nightjar.numeric.Workers;
 import nightjar.recording.Axis;
 import nightjar.recording.Grid;
-import nightjar.recording.KeptFrames;
 import nightjar.recording.Mask;
-import nightjar.recording.VoxelOrder;
 
 /**
- * Gaussian smoothing by its full width at half maximum in mm along every axis, normalised within
- * the mask: nothing bleeds in from outside, and a constant stays what it is (numerics section 3).
+ * Smoothing by a Gaussian within each plane, normalised within the mask so that nothing bleeds in
+ * from outside: {@code sum(g m y) / sum(g m)} over the neighbours, m the mask (numerics section 3).
+ * Planes are never mixed.
  */
 public final class Smoothing {
-  /** The kernel ends where it has fallen below 1/3000 of its top: 4 standard deviations. */
-  private static final double EXTENT = 4;
+  /** FWHM over standard deviation of a Gaussian, 2 sqrt(2 ln 2). */
+  private static final double FWHM_OVER_SIGMA = 2 * Math.sqrt(2 * Math.log(2));
 
-  private static final double WIDTH_OF_UNIT_SD = 2 * Math.sqrt(2 * Math.log(2));
+  /** Beyond four standard deviations the weight is below 4e-4 of the centre's. */
+  private static final double REACH_IN_SIGMAS = 4;
 
-  private final Grid grid;
-  private final double[] alongPlanes;
-  private final double[] alongDepths;
-  private final double[] alongLaterals;
+  private static final int FRAMES_A_BLOCK = 16;
 
-  private Smoothing(Grid grid, double widthMillimetres) {
-    this.grid = grid;
-    alongPlanes = kernel(grid.planes(), widthMillimetres);
-    alongDepths = kernel(grid.depths(), widthMillimetres);
-    alongLaterals = kernel(grid.laterals(), widthMillimetres);
-  }
-
-  /** Half of the symmetric kernel, from its top. */
-  private static double[] kernel(Axis axis, double width) {
-    double sd = width / WIDTH_OF_UNIT_SD;
-    double spacing = axis.spacingMillimetres();
-    int reach =
-        spacing > 0 ? (int) Math.min(axis.size() - 1, Math.floor(EXTENT * sd / spacing)) : 0;
-    double[] k = new double[reach + 1];
-    for (int i = 0; i <= reach; i++) {
-      double x = i * spacing / sd;
-      k[i] = Math.exp(-x * x / 2);
-    }
-    return k;
-  }
+  private Smoothing() {}
 
   /**
-   * Smooths the kept frames of a film within the mask; other voxels stay.
+   * Smooths every frame. A value that is missing inside the mask spreads within its frame, so give
+   * a final mask; rejected frames may come out with gaps.
    *
-   * @param film modified, every frame by every voxel; NaN does not count and stays
+   * @param film one value a voxel of the grid; mask voxels are modified, others untouched
+   * @param fwhmMillimetres full width at half maximum along depth and lateral, mm; 0 = none
    */
   public static void smooth(
-      FloatRows film,
-      KeptFrames kept,
-      Grid grid,
-      Mask mask,
-      double widthMillimetres,
-      Workers workers) {
-    Smoothing s = new Smoothing(grid, widthMillimetres);
+      FloatRows film, Grid grid, Mask mask, double fwhmMillimetres, Workers workers) {
+    if (fwhmMillimetres == 0) {
+      return;
+    }
+    double[] depthKernel = kernel(grid.depths(), fwhmMillimetres);
+    double[] lateralKernel = kernel(grid.laterals(), fwhmMillimetres);
+    double[] shares = new double[grid.voxels()];
+    for (int v = 0; v < shares.length; v++) {
+      shares[v] = mask.contains(v) ? 1 : 0;
+    }
+    double[] weights = shares.clone();
+    convolve(weights, grid, depthKernel, lateralKernel);
     workers.forEachBlock(
-        kept.count(),
-        8,
+        film.rows(),
+        FRAMES_A_BLOCK,
         (first, end) -> {
           float[] row = new float[film.width()];
-          double[] values = new double[row.length];
-          for (int i = first; i < end; i++) {
-            film.read(kept.frame(i), 0, row.length, row, 0);
+          double[] values = new double[film.width()];
+          for (int t = first; t < end; t++) {
+            film.read(t, 0, row.length, row, 0);
             for (int v = 0; v < row.length; v++) {
-              values[v] = mask.contains(v) ? row[v] : Double.NaN;
+              values[v] = shares[v] > 0 ? row[v] : 0;
             }
-            double[] smooth = s.apply(values);
+            convolve(values, grid, depthKernel, lateralKernel);
             for (int v = 0; v < row.length; v++) {
-              row[v] = Double.isNaN(smooth[v]) ? row[v] : (float) smooth[v];
+              row[v] = shares[v] > 0 ? (float) (values[v] / weights[v]) : row[v];
             }
-            film.write(kept.frame(i), 0, row.length, row, 0);
+            film.write(t, 0, row.length, row, 0);
           }
         });
   }
 
-  /** Smooths one value a mask voxel; NaN does not count and stays. */
-  public static double[] smooth(
-      double[] values, VoxelOrder order, Grid grid, double widthMillimetres) {
-    double[] smooth = new Smoothing(grid, widthMillimetres).apply(order.spread(values, Double.NaN));
-    double[] result = new double[values.length];
-    for (int k = 0; k < result.length; k++) {
-      result[k] = smooth[order.voxel(k)];
+  /** Half of a symmetric kernel, centre first; its scale cancels. */
+  static double[] kernel(Axis axis, double fwhmMillimetres) {
+    if (axis.size() == 1) {
+      return new double[] {1};
     }
-    return result;
+    double sigma = fwhmMillimetres / FWHM_OVER_SIGMA / axis.spacingMillimetres();
+    int reach = Math.min(axis.size() - 1, (int) Math.ceil(REACH_IN_SIGMAS * sigma));
+    double[] half = new double[reach + 1];
+    for (int k = 0; k <= reach; k++) {
+      half[k] = Math.exp(-0.5 * (k / sigma) * (k / sigma));
+    }
+    return half;
   }
 
-  /** Weighted means of the values that are there, at the voxels that have one. */
-  private double[] apply(double[] values) {
-    double[] weighted = new double[values.length];
-    double[] weight = new double[values.length];
-    for (int v = 0; v < values.length; v++) {
-      boolean there = !Double.isNaN(values[v]);
-      weighted[v] = there ? values[v] : 0;
-      weight[v] = there ? 1 : 0;
-    }
-    weighted = convolve(weighted);
-    weight = convolve(weight);
-    for (int v = 0; v < values.length; v++) {
-      weighted[v] = Double.isNaN(values[v]) ? Double.NaN : weighted[v] / weight[v];
-    }
-    return weighted;
-  }
-
-  private double[] convolve(double[] a) {
+  private static void convolve(double[] values, Grid grid, double[] depth, double[] lateral) {
     int depths = grid.depths().size();
     int laterals = grid.laterals().size();
-    double[] b = along(a, alongLaterals, 1, laterals);
-    b = along(b, alongDepths, laterals, depths);
-    return along(b, alongPlanes, depths * laterals, grid.planes().size());
+    double[] plane = new double[depths * laterals];
+    for (int p = 0; p < grid.planes().size(); p++) {
+      int from = p * plane.length;
+      java.util.Arrays.fill(plane, 0);
+      for (int z = 0; z < depths; z++) {
+        // Along depth whole lines are added, along lateral shifted parts of a line.
+        for (int j = Math.max(0, z - depth.length + 1);
+            j < Math.min(depths, z + depth.length);
+            j++) {
+          double w = depth[Math.abs(j - z)];
+          addScaled(w, values, from + j * laterals, plane, z * laterals, laterals);
+        }
+      }
+      java.util.Arrays.fill(values, from, from + plane.length, 0);
+      for (int z = 0; z < depths; z++) {
+        int line = z * laterals;
+        addScaled(lateral[0], plane, line, values, from + line, laterals);
+        for (int k = 1; k < lateral.length; k++) {
+          addScaled(lateral[k], plane, line + k, values, from + line, laterals - k);
+          addScaled(lateral[k], plane, line, values, from + line + k, laterals - k);
+        }
+      }
+    }
   }
 
-  private static double[] along(double[] a, double[] kernel, int stride, int size) {
-    if (kernel.length == 1) {
-      return a;
+  private static void addScaled(
+      double w, double[] from, int first, double[] into, int offset, int count) {
+    for (int i = 0; i < count; i++) {
+      into[offset + i] += w * from[first + i];
     }
-    double[] b = new double[a.length];
-    for (int v = 0; v < a.length; v++) {
-      int i = v / stride % size;
-      double sum = kernel[0] * a[v];
-      for (int k = 1; k < kernel.length; k++) {
-        sum +=
-            kernel[k] * ((i >= k ? a[v - k * stride] : 0) + (i + k < size ? a[v + k * stride] : 0));
-      }
-      b[v] = sum;
-    }
-    return b;
   }
 }

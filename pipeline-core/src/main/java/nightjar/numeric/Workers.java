@@ -9,6 +9,8 @@ import java.util.concurrent.ExecutorCompletionService;
 import java.util.concurrent.ExecutorService;
 import java.util.concurrent.Executors;
 import java.util.concurrent.Future;
+import java.util.concurrent.atomic.AtomicInteger;
+import nightjar.recording.Progress;
 
 /**
  * A fixed number of threads that share a range in blocks. The blocks depend on the range alone, so
@@ -90,6 +92,21 @@ public final class Workers implements AutoCloseable {
     if (failure != null) {
       throw new IllegalStateException(failure);
     }
+  }
+
+  /**
+   * The same, and {@code progress} hears the share done after each block; what it throws stops the
+   * work.
+   */
+  public void forEachBlock(int total, int blockSize, Progress progress, Block block) {
+    AtomicInteger done = new AtomicInteger();
+    forEachBlock(
+        total,
+        blockSize,
+        (first, end) -> {
+          block.run(first, end);
+          progress.report(done.addAndGet(end - first) / (double) total);
+        });
   }
 
   @Override

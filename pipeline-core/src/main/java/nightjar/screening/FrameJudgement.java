@@ -2,7 +2,7 @@ package nightjar.screening;
 
 import nightjar.recording.KeptFrames;
 
-/** Which frames are kept, and what was judged of each. Immutable. */
+/** Which aligned frames are kept, and the figures that they were judged by. Immutable. */
 public final class FrameJudgement {
   private final KeptFrames kept;
   private final double[] logPower;
@@ -14,19 +14,25 @@ public final class FrameJudgement {
     this.change = change;
   }
 
-  /** Kept frames, and why the others are not. */
+  /**
+   * The frames kept; the reasons of others are codes of {@link RejectionReason} joined by {@code
+   * +}.
+   */
   public KeptFrames kept() {
     return kept;
   }
 
-  /** Mean of ln(power) of frame {@code t} over the mask's inner voxels; NaN without a value. */
+  /**
+   * Mean of ln(power) of frame {@code t} over the shrunk mask of all planes; NaN where it has no
+   * value.
+   */
   public double logPower(int t) {
     return logPower[t];
   }
 
   /**
-   * Root mean square difference of ln(power) of frame {@code t} to the median of its neighbours;
-   * NaN without a value.
+   * Root mean square, over the shrunk mask of all planes, of the difference of ln(power) of frame
+   * {@code t} to its voxelwise median over the 5 frames around it; NaN where it has no value.
    */
   public double change(int t) {
     return change[t];

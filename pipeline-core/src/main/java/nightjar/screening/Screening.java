@@ -1,125 +1,99 @@
 package nightjar.screening;
 
 import java.util.ArrayList;
-import java.util.Arrays;
-import java.util.LinkedHashSet;
+import java.util.EnumSet;
 import java.util.List;
-import java.util.Set;
+import nightjar.numeric.FlooredLog;
 import nightjar.numeric.Workers;
 import nightjar.recording.KeptFrames;
 import nightjar.recording.Progress;
-import nightjar.recording.VoxelOrder;
 import org.jspecify.annotations.Nullable;
 
 /**
- * Judges aligned frames (numerics section 1): {@code power} and {@code change} by modified z-scores
- * that must also matter in practice, {@code displacement}, {@code outside} and {@code missing} by
- * plain limits. A frame rejected in one plane is rejected in all; it is left out of the model,
- * never filled in.
+ * Decides which aligned frames are kept (numerics section 1). Each plane is judged by itself; a
+ * frame rejected in one is rejected in all.
  */
 public final class Screening {
-  private static final double FLOOR_SHARE = 1e-3;
-  private static final double MOST_LOST = 0.5;
+  private Screening() {}
 
-  private final ScreeningInput input;
-  private final ScreeningSettings settings;
-  private final List<Set<String>> reasons = new ArrayList<>();
-
-  private Screening(ScreeningInput input, ScreeningSettings settings) {
-    this.input = input;
-    this.settings = settings;
-    for (int t = 0; t < input.times().size(); t++) {
-      reasons.add(new LinkedHashSet<>());
-    }
-  }
-
-  /** Judges every frame. Where screening is off only lost frames are rejected. */
+  /**
+   * Judges every frame, in one pass over the film.
+   *
+   * <p>With {@code settings.enabled()} false only frames with more than half of the mask outside
+   * the field or missing are rejected: there is nothing to fit.
+   */
   public static FrameJudgement judge(
-      ScreeningInput input, ScreeningSettings settings, Workers workers, Progress progress) {
-    Screening s = new Screening(input, settings);
-    int planes = input.grid().planes().size();
-    int frames = input.times().size();
-    double[] logPower = new double[frames];
-    double[] change = new double[frames];
-    double voxels = 0;
+      ScreeningInput in, ScreeningSettings settings, Workers workers, Progress progress) {
+    int planes = in.grid().planes().size();
+    FlooredLog log = FlooredLog.ofMedianPower(in.medianPower());
+    List<EnumSet<RejectionReason>> reasons = new ArrayList<>();
+    for (int t = 0; t < in.times().size(); t++) {
+      reasons.add(EnumSet.noneOf(RejectionReason.class));
+    }
+    PlaneJudge judge = new PlaneJudge(in.times(), settings, reasons);
+    OverPlanes over = new OverPlanes(in.times().size());
     for (int p = 0; p < planes; p++) {
-      VoxelOrder inner = ShrunkMask.ofPlane(input.mask(), input.grid(), p);
-      if (inner.size() == 0) {
-        continue;
-      }
       int plane = p;
-      LogPowerSeries series =
-          LogPowerSeries.of(
-              input.film(),
-              input.times(),
-              inner,
-              FLOOR_SHARE * input.medianPower(),
-              workers,
-              share -> progress.report((plane + share) / planes));
-      s.judgePlane(series, p);
-      for (int t = 0; t < frames; t++) {
-        logPower[t] += inner.size() * series.logPower[t];
-        change[t] += inner.size() * series.change[t];
-      }
-      voxels += inner.size();
+      PlaneVoxels voxels = PlaneVoxels.of(p, in.grid(), in.mask(), in.film(), log);
+      PlaneTraces traces =
+          PlaneTraces.of(
+              voxels, in, log, workers, share -> progress.report((plane + share) / planes));
+      int unit = in.motion().wholeVolume() ? 0 : p;
+      double[] displacement = MedianPosition.distances(in.motion(), unit, in.grid(), in.mask());
+      judge.judge(traces, voxels.mask.length, in.stimuliOf(p), displacement);
+      over.add(traces, voxels);
     }
-    for (int t = 0; t < frames; t++) {
-      logPower[t] /= voxels;
-      change[t] /= voxels;
+    List<@Nullable String> codes = new ArrayList<>();
+    for (EnumSet<RejectionReason> r : reasons) {
+      codes.add(r.isEmpty() ? null : RejectionReason.codes(r));
     }
-    s.judgePlaces();
-    return new FrameJudgement(s.kept(), logPower, change);
+    return new FrameJudgement(new KeptFrames(in.times(), codes), over.logPower(), over.change());
   }
 
-  private void judgePlane(LogPowerSeries series, int plane) {
-    for (int t = 0; t < reasons.size(); t++) {
-      if (series.missing[t] > MOST_LOST && input.outsideShare().applyAsDouble(t) <= MOST_LOST) {
-        reasons.get(t).add("missing");
-      }
-    }
-    if (!settings.enabled()) {
-      return;
-    }
-    double[] response =
-        StimulusShare.of(
-            series.logPower, input.stimuli().apply(plane), input.times(), settings.windowFrames());
-    double[] rest = new double[response.length];
-    Arrays.setAll(rest, t -> series.logPower[t] - response[t]);
-    double[] base = RunningMedian.of(rest, settings.windowFrames(), input.times());
-    double[] deviation = new double[rest.length];
-    Arrays.setAll(deviation, t -> rest[t] - base[t]);
-    double[] powerZ = ModifiedZ.of(deviation);
-    double[] changeZ = ModifiedZ.of(series.change);
-    double usualChange = ModifiedZ.median(series.change);
-    for (int t = 0; t < rest.length; t++) {
-      if (Math.abs(powerZ[t]) > settings.zLimit()
-          && Math.abs(deviation[t]) > settings.minPowerDeviation()) {
-        reasons.get(t).add("power");
-      }
-      if (changeZ[t] > settings.zLimit()
-          && series.change[t] > settings.minChangeRatio() * usualChange) {
-        reasons.get(t).add("change");
-      }
-    }
-  }
+  /** Means over the inner voxels of all planes. */
+  private static final class OverPlanes {
+    final double[] power;
+    final double[] square;
+    final double[] voxels;
+    double level;
+    int inner;
 
-  private void judgePlaces() {
-    double[] displacement = Displacements.of(input.motion(), input.grid());
-    for (int t = 0; t < reasons.size(); t++) {
-      if (settings.enabled() && displacement[t] > settings.maxDisplacementMillimetres()) {
-        reasons.get(t).add("displacement");
-      }
-      if (input.outsideShare().applyAsDouble(t) > MOST_LOST) {
-        reasons.get(t).add("outside");
-      }
+    OverPlanes(int frames) {
+      power = new double[frames];
+      square = new double[frames];
+      voxels = new double[frames];
     }
-  }
 
-  private KeptFrames kept() {
-    List<@Nullable String> joined = new ArrayList<>();
-    for (Set<String> r : reasons) {
-      joined.add(r.isEmpty() ? null : String.join("+", r));
+    void add(PlaneTraces traces, PlaneVoxels plane) {
+      int n = plane.inner.length;
+      if (n == 0) {
+        return;
+      }
+      for (int t = 0; t < power.length; t++) {
+        if (!Double.isNaN(traces.power[t])) {
+          power[t] += n * traces.power[t];
+          square[t] += n * traces.change[t] * traces.change[t];
+          voxels[t] += n;
+        }
+      }
+      level += n * plane.meanLevel();
+      inner += n;
     }
-    return new KeptFrames(input.times(), joined);
+
+    double[] logPower() {
+      double[] mean = new double[power.length];
+      for (int t = 0; t < mean.length; t++) {
+        mean[t] = level / inner + power[t] / voxels[t];
+      }
+      return mean;
+    }
+
+    double[] change() {
+      double[] rms = new double[square.length];
+      for (int t = 0; t < rms.length; t++) {
+        rms[t] = Math.sqrt(square[t] / voxels[t]);
+      }
+      return rms;
+    }
   }
 }

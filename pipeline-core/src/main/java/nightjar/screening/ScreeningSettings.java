@@ -3,8 +3,8 @@ package nightjar.screening;
 /**
  * Plan section {@code screening}.
  *
- * @param enabled whether frames are judged; frames that are mostly missing or outside the field are
- *     rejected in any case
+ * @param enabled whether frames are judged; false: only those with more than half of the mask
+ *     outside the field or missing are rejected
  * @param zLimit limit of the modified z-score
  * @param minPowerDeviation smallest deviation of log power that matters
  * @param minChangeRatio smallest ratio of change to its median that matters

@@ -5,6 +5,7 @@ import static nightjar.alignment.MovingTexture.plane;
 import static nightjar.alignment.MovingTexture.shifted;
 import static org.junit.jupiter.api.Assertions.assertArrayEquals;
 import static org.junit.jupiter.api.Assertions.assertEquals;
+import static org.junit.jupiter.api.Assertions.assertFalse;
 import static org.junit.jupiter.api.Assertions.assertThrows;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
@@ -356,7 +357,7 @@ class AlignmentTest {
         film.rows().read(t, 0, 600, got, 0);
         assertArrayEquals(want, got);
         assertEquals(RigidMotion.NONE, film.motion().at(t, 0));
-        assertEquals(0, film.outsideShare(t, Mask.all(600)));
+        assertFalse(film.isOutsideField(t, 0));
       }
     }
   }

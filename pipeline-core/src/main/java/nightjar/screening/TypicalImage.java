@@ -1,0 +1,80 @@
+package nightjar.screening;
+
+import java.util.Comparator;
+import java.util.List;
+import java.util.stream.IntStream;
+import nightjar.numeric.FlooredLog;
+import nightjar.numeric.Median;
+import nightjar.numeric.Workers;
+import nightjar.recording.FrameSource;
+
+/** The voxelwise median of some frames, and which frames are nearest to it. */
+final class TypicalImage {
+  private static final int VOXELS_A_BLOCK = 1024;
+  private static final int FRAMES_A_BLOCK = 8;
+
+  private TypicalImage() {}
+
+  /** Median of the given frames per voxel, NaN left out. */
+  static float[] median(FrameSource source, int[] frames, Workers workers) {
+    int voxels = source.grid().voxels();
+    float[][] rows = new float[frames.length][voxels];
+    workers.forEachBlock(
+        frames.length,
+        FRAMES_A_BLOCK,
+        (first, end) -> {
+          for (int i = first; i < end; i++) {
+            source.read(frames[i], 1, rows[i], 0);
+          }
+        });
+    float[] median = new float[voxels];
+    workers.forEachBlock(
+        voxels,
+        VOXELS_A_BLOCK,
+        (first, end) -> {
+          float[] values = new float[rows.length];
+          for (int v = first; v < end; v++) {
+            for (int i = 0; i < values.length; i++) {
+              values[i] = rows[i][v];
+            }
+            median[v] = Median.sorting(values, values.length);
+          }
+        });
+    return median;
+  }
+
+  /** The given frames, the nearest to {@code image} first. */
+  static List<Integer> nearestFirst(
+      FrameSource source, int[] frames, float[] image, FlooredLog log, Workers workers) {
+    double[] distance = new double[frames.length];
+    workers.forEachBlock(
+        frames.length,
+        FRAMES_A_BLOCK,
+        (first, end) -> {
+          float[] frame = new float[image.length];
+          for (int i = first; i < end; i++) {
+            source.read(frames[i], 1, frame, 0);
+            distance[i] = distance(frame, image, log);
+          }
+        });
+    return IntStream.range(0, frames.length)
+        .boxed()
+        .sorted(Comparator.<Integer>comparingDouble(i -> distance[i]).thenComparing(i -> frames[i]))
+        .map(i -> frames[i])
+        .toList();
+  }
+
+  /** Mean square difference of ln(power) over the voxels that both have. */
+  private static double distance(float[] frame, float[] image, FlooredLog log) {
+    double sum = 0;
+    int values = 0;
+    for (int v = 0; v < frame.length; v++) {
+      double d = log.of(frame[v]) - log.of(image[v]);
+      if (!Double.isNaN(d)) {
+        sum += d * d;
+        values++;
+      }
+    }
+    return values == 0 ? Double.POSITIVE_INFINITY : sum / values;
+  }
+}
