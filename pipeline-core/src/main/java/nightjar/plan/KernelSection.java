@@ -15,6 +15,8 @@ record KernelSection(Kernel kernel, boolean derivative) {
   private static final double PEAK_SECONDS = 2.1;
   private static final double WIDTH_SECONDS = 2.9;
   private static final Range SECONDS = Range.above(0, 60);
+  private static final List<String> UNDERSHOOT =
+      List.of("undershoot_peak_s", "undershoot_fwhm_s", "undershoot_ratio");
 
   static KernelSection read(Section top) {
     Section s = top.section("kernel");
@@ -28,6 +30,9 @@ record KernelSection(Kernel kernel, boolean derivative) {
           .found("kernel.shape: " + shape)
           .expected("gamma or double_gamma")
           .remedy("take one of these");
+    }
+    if (shape.equals("gamma")) {
+      refuseUndershoot(s);
     }
     GammaKernel response =
         gamma(
@@ -50,6 +55,16 @@ record KernelSection(Kernel kernel, boolean derivative) {
     boolean derivative = s.flag("derivative", false);
     s.done();
     return new KernelSection(kernel, derivative);
+  }
+
+  private static void refuseUndershoot(Section s) {
+    for (String key : UNDERSHOOT) {
+      if (s.has(key) && !s.isNull(key)) {
+        throw s.refusal(key, "only the kernel double_gamma has an undershoot")
+            .found("kernel." + key)
+            .remedy("write shape: double_gamma or leave the key out");
+      }
+    }
   }
 
   private static GammaKernel gamma(Section s, String key, double peak, double width) {

@@ -6,16 +6,23 @@ import java.util.Optional;
 
 /** The known name that a mistyped one is likely to mean. */
 final class NearestName {
+  /** No name of ours is longer; the table of distances stays small. */
+  private static final int LONGEST = 64;
+
   private NearestName() {}
 
   /** The nearest by edit distance [Levenshtein 1966, Sov Phys Dokl 10:707], if near at all. */
   static Optional<String> of(String name, Collection<String> known) {
+    if (name.length() > LONGEST) {
+      return Optional.empty();
+    }
     return known.stream()
+        .filter(k -> k.length() <= LONGEST)
         .min(Comparator.comparingInt((String k) -> distance(name, k)).thenComparing(k -> k))
         .filter(k -> distance(name, k) <= Math.max(2, k.length() / 2));
   }
 
-  /** Insertions, deletions, replacements and swaps of neighbours. */
+  /** Insertions, deletions, replacements and swaps of neighbours, each counted as one. */
   static int distance(String a, String b) {
     int[][] d = new int[a.length() + 1][b.length() + 1];
     for (int i = 0; i <= a.length(); i++) {

@@ -18,10 +18,9 @@ final class OutcomeSections {
     s.word("tail", "both", List.of("both"));
     String method = s.word("method", "bh", List.of("bh", "by", "bonferroni", "sidak"));
     double level = s.number("level", InferenceSettings.DEFAULT.level(), Range.above(0, 0.5));
-    // Used by randomisation alone: read, so that a mistake is told, and held for the record.
-    s.words("statistics", List.of("max_t", "cluster_mass", "tfce"));
-    s.number("cluster_p", 0.001, Range.above(0, 0.5));
-    s.integer("seed", 0, Range.of(0, Integer.MAX_VALUE));
+    s.lacks("statistics", "statistics of randomisation", List.of("[max_t]"));
+    s.lacks("cluster_p", "clusters", List.of("0.001"));
+    s.lacks("seed", "inference by randomisation", List.of("20260301"));
     s.done();
     return new InferenceSettings(
         InferenceSettings.Adjustment.valueOf(method.toUpperCase(Locale.ROOT)), level);

@@ -6,7 +6,6 @@ import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
 import java.util.Set;
-import java.util.stream.Collectors;
 import nightjar.design.ModelledStimulus;
 import nightjar.design.StimulusSettings;
 import nightjar.glm.Contrast;
@@ -54,6 +53,7 @@ public final class PlanCheck {
           .at("stimuli")
           .remedy("model at least one");
     }
+    names.forEach((name, logged) -> refuseNameOfOtherColumn(name, logged, plan));
     plan.contrasts().forEach(c -> check(c, plan, names.keySet()));
     List<ModelledStimulus> stimuli = new ArrayList<>();
     names.forEach((name, logged) -> stimuli.add(new ModelledStimulus(name, events.of(logged))));
@@ -77,10 +77,19 @@ public final class PlanCheck {
     }
   }
 
+  private static void refuseNameOfOtherColumn(String name, String logged, Plan plan) {
+    if (name.matches(OTHER_COLUMNS)) {
+      throw RefusedInput.because("a stimulus has the name of another column of the model")
+          .in(plan.fileName())
+          .at("stimuli")
+          .found(name)
+          .remedy("add a_name: {logged_as: " + Names.shown(logged) + "} there");
+    }
+  }
+
   private static void check(Contrast contrast, Plan plan, Set<String> stimuli) {
     for (String column : contrast.weights().keySet()) {
-      String stimulus =
-          column.endsWith(":slope") ? column.substring(0, column.length() - 6) : column;
+      String stimulus = column.split(":", 2)[0];
       if (stimuli.contains(stimulus) || column.matches(OTHER_COLUMNS)) {
         continue;
       }
@@ -88,7 +97,7 @@ public final class PlanCheck {
           .in(plan.fileName())
           .at("contrast " + contrast.name())
           .found(Names.shown(column))
-          .expected("one of " + stimuli.stream().collect(Collectors.joining(", ")))
+          .expected("one of " + String.join(", ", stimuli))
           .remedy(suggestion(column, stimuli, "name a stimulus of the event table"));
     }
   }

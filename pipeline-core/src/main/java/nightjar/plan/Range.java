@@ -1,8 +1,5 @@
 package nightjar.plan;
 
-import nightjar.refusal.RefusedInput;
-import org.snakeyaml.engine.v2.nodes.Node;
-
 /**
  * The values that a number may have.
  *
@@ -19,20 +16,16 @@ record Range(double low, double high, boolean openLow) {
     return new Range(low, high, true);
   }
 
+  boolean holds(double x) {
+    return (openLow ? x > low : x >= low) && x <= high;
+  }
+
   String words() {
     return (openLow ? "above " : "") + plain(low) + " to " + plain(high);
   }
 
-  private static String plain(double x) {
+  /** Whole numbers without a decimal point. */
+  static String plain(double x) {
     return x == Math.rint(x) && Math.abs(x) < 1e15 ? Long.toString((long) x) : Double.toString(x);
-  }
-
-  double check(Section section, String name, Node node, double x) {
-    boolean inside = (openLow ? x > low : x >= low) && x <= high;
-    if (!inside) {
-      RefusedInput r = section.refusal(node, name + " is out of range");
-      throw r.found(plain(x)).expected(words()).remedy("give a value in this range");
-    }
-    return x;
   }
 }

@@ -1,5 +1,6 @@
 package nightjar.plan;
 
+import java.util.Arrays;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Locale;
@@ -14,6 +15,7 @@ import org.jspecify.annotations.Nullable;
 import org.snakeyaml.engine.v2.api.Dump;
 import org.snakeyaml.engine.v2.api.DumpSettings;
 import org.snakeyaml.engine.v2.common.FlowStyle;
+import org.snakeyaml.engine.v2.schema.CoreSchema;
 
 /** A plan with all defaults written out, in the order of the contract. */
 public final class ResolvedPlan {
@@ -62,7 +64,13 @@ public final class ResolvedPlan {
             "level",
             plan.inference().level(),
             "randomisations",
-            0));
+            0,
+            "statistics",
+            List.of("max_t"),
+            "cluster_p",
+            0.001,
+            "seed",
+            20260301));
     m.put("regions", map("source", word(plan.regions())));
     m.put(
         "responses",
@@ -76,10 +84,14 @@ public final class ResolvedPlan {
     return m;
   }
 
-  /** The same as YAML; {@link PlanFile#parse} reads an equal plan back. */
+  /**
+   * The same as YAML. {@link PlanFile#parse} reads back an equal plan, in which every stimulus has
+   * an entry.
+   */
   public static String toYaml(Plan plan, List<String> stimuli) {
     DumpSettings settings =
         DumpSettings.builder()
+            .setSchema(new CoreSchema())
             .setDefaultFlowStyle(FlowStyle.AUTO)
             .setWidth(120)
             .setDereferenceAliases(true)
@@ -156,7 +168,7 @@ public final class ResolvedPlan {
 
   private static Map<String, Object> nuisance(NuisanceSettings n) {
     List<String> motion =
-        java.util.Arrays.stream(NuisanceSettings.MotionColumns.values())
+        Arrays.stream(NuisanceSettings.MotionColumns.values())
             .filter(n.motion()::contains)
             .map(ResolvedPlan::word)
             .toList();
