@@ -40,11 +40,7 @@ record PlanText(String fileName) {
     String name = String.valueOf(file.getFileName());
     try {
       if (Files.size(file) > LARGEST) {
-        throw RefusedInput.because("the plan is too large")
-            .in(name)
-            .found(Files.size(file) + " bytes")
-            .expected("at most " + LARGEST)
-            .remedy("give a YAML plan");
+        throw new PlanText(name).tooLarge(Files.size(file) + " bytes");
       }
       byte[] bytes = Files.readAllBytes(file);
       return StandardCharsets.UTF_8.newDecoder().decode(ByteBuffer.wrap(bytes)).toString();
@@ -66,11 +62,16 @@ record PlanText(String fileName) {
 
   /** The top mapping. */
   MappingNode parse(String text) {
+    if (text.length() > LARGEST) {
+      throw tooLarge(text.length() + " characters");
+    }
     LoadSettings settings =
         LoadSettings.builder()
             .setLabel(fileName)
             .setSchema(new CoreSchema())
             .setCodePointLimit(LARGEST)
+            // The library stumbles where its buffer ends between halves of a character.
+            .setBufferSize(Math.max(1, text.length()))
             .setAllowDuplicateKeys(true)
             .setMaxAliasesForCollections(1)
             .build();
@@ -96,6 +97,14 @@ record PlanText(String fileName) {
           .in(fileName)
           .remedy("mend it");
     }
+  }
+
+  private RefusedInput tooLarge(String size) {
+    return RefusedInput.because("the plan is too large")
+        .in(fileName)
+        .found(size)
+        .expected("at most " + LARGEST)
+        .remedy("give a YAML plan");
   }
 
   private static String plain(String message) {
