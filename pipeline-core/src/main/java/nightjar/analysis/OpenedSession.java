@@ -49,6 +49,7 @@ record OpenedSession(
       List<Warning> warnings = new ArrayList<>();
       EventTiming.check(events, recording.times(), recording.fileName())
           .forEach(s -> warnings.add(new Warning("events", s)));
+      EarlyRecordingCheck.of(plan, recording);
       EarlyDesignCheck.of(plan, stimuli, recording.times(), offsets(recording));
       RegionLabels regions = SessionRegions.of(plan, files.regions(), recording);
       if (regions.regions().isEmpty() && plan.regions() != nightjar.regions.RegionSource.NONE) {

@@ -56,6 +56,7 @@ final class RecordingFacts {
     m.put("interval_s", rounded(times.intervalSeconds()));
     m.put("first_frame_s", rounded(times.at(0)));
     m.put("last_frame_s", rounded(times.at(last)));
+    m.put("duration_s", rounded(times.at(last) - times.at(0) + times.intervalSeconds()));
     m.put("missing_frames", times.gridPosition(last) - last);
     m.put("gaps", times.segments() - 1);
   }

@@ -13,4 +13,9 @@ public record RunSettings(int threads, Scratch scratch) {
   public static RunSettings ofThisMachine() {
     return new RunSettings(Runtime.getRuntime().availableProcessors(), Scratch.ofThisMachine());
   }
+
+  /** The same with another number of threads. */
+  public RunSettings withThreads(int number) {
+    return new RunSettings(number, scratch);
+  }
 }

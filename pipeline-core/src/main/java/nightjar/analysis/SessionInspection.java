@@ -56,17 +56,23 @@ public final class SessionInspection {
     try {
       recording.ifPresent(r -> sections.put("recording", RecordingFacts.of(r)));
       events.ifPresent(e -> sections.put("events", EventFacts.of(e)));
-      plan.ifPresent(p -> sections.put("plan", planFacts(p)));
+      plan.ifPresent(p -> sections.put("plan", PlanFacts.of(p)));
       if (recording.isPresent()) {
         events.ifPresent(e -> checkTiming(e, recording.get()));
         sections.put(
             "needs", MachineNeeds.of(recording.get().grid(), recording.get().times().size()));
+      }
+      if (plan.isPresent() && recording.isPresent()) {
+        check(() -> EarlyRecordingCheck.of(plan.get(), recording.get()));
       }
       if (plan.isPresent() && events.isPresent()) {
         checkDesign(plan.get(), events.get(), recording);
       }
       if (files.regions() != null) {
         regions(files.regions(), plan, recording);
+      } else if (plan.isPresent() && events.isPresent() && recording.isPresent()) {
+        // All that an analysis must have is there, so a regions file that is not is missing.
+        check(() -> SessionRegions.of(plan.get(), null, recording.get()));
       }
       if (files.traces() != null) {
         traces(files.traces(), recording);
@@ -93,6 +99,14 @@ public final class SessionInspection {
     }
   }
 
+  private void check(Runnable work) {
+    attempt(
+        () -> {
+          work.run();
+          return true;
+        });
+  }
+
   private void checkTiming(EventTable events, RecordingFile recording) {
     attempt(() -> EventTiming.check(events, recording.times(), recording.fileName()))
         .ifPresent(warnings::addAll);
@@ -106,14 +120,6 @@ public final class SessionInspection {
       attempt(() -> EarlyDesignCheck.of(plan, stimuli.get(), r.times(), offsets))
           .ifPresent(warnings::addAll);
     }
-  }
-
-  private static Map<String, Object> planFacts(Plan plan) {
-    Map<String, Object> m = new LinkedHashMap<>();
-    m.put("file", plan.fileName());
-    m.put("name", plan.name());
-    m.put("contrasts", plan.contrasts().stream().map(c -> c.name()).toList());
-    return m;
   }
 
   private void regions(Path file, Optional<Plan> plan, Optional<RecordingFile> recording) {
@@ -153,11 +159,6 @@ public final class SessionInspection {
     m.put("traces", traces.get().stream().map(Trace::name).toList());
     sections.put("traces", m);
     recording.ifPresent(
-        r ->
-            attempt(
-                () -> {
-                  TraceFile.checkCoverage(traces.get(), name, r.times(), r.fileName());
-                  return true;
-                }));
+        r -> check(() -> TraceFile.checkCoverage(traces.get(), name, r.times(), r.fileName())));
   }
 }

@@ -7,7 +7,6 @@ import nightjar.analysis.AnalysisOutcome;
 import nightjar.analysis.RunSettings;
 import nightjar.analysis.SessionAnalysis;
 import nightjar.analysis.SessionFiles;
-import nightjar.film.Scratch;
 import nightjar.refusal.RefusedInput;
 import org.jspecify.annotations.Nullable;
 import picocli.CommandLine.Command;
@@ -21,6 +20,13 @@ import picocli.CommandLine.Spec;
     sortOptions = false,
     mixinStandardHelpOptions = true,
     description = {"Analyses one session and writes maps, tables, verdict and report.", ""},
+    exitCodeListHeading = "%nExit codes:%n",
+    exitCodeList = {
+      "0:done; the result folder is complete",
+      "2:the input or the command line was refused; nothing was written",
+      "3:the analysis failed; an incident was logged",
+      "130:interrupted; nothing was written"
+    },
     footer = {
       "",
       "Example:",
@@ -52,29 +58,33 @@ final class AnalyseCommand implements Callable<Integer> {
   @Option(
       names = "--regions",
       paramLabel = "FILE",
-      description = "Label file or polygons, where the plan takes regions from a file.")
+      description =
+          "Label file (NetCDF) or polygons (JSON, mm), where the plan's regions come from a file"
+              + " (default: none).")
   private @Nullable Path regions;
 
   @Option(
       names = "--traces",
       paramLabel = "FILE",
-      description = "Continuous traces with their time (s).")
+      description =
+          "Continuous traces with their time (s); tab or comma separated (default: none).")
   private @Nullable Path traces;
 
   @Option(
       names = "--out",
       required = true,
       paramLabel = "FOLDER",
-      description = "Result folder; must not exist or be empty.")
+      description = "Result folder; must not exist, or be empty.")
   private Path out = Path.of("");
 
   @Option(
       names = "--threads",
       paramLabel = "N",
-      description = "Threads (default: all processors). Results do not depend on it.")
+      description =
+          "Number of threads, 1 to 1024; no result depends on it (default: all processors).")
   private @Nullable Integer threads;
 
-  @Option(names = "--quiet", description = "Print nothing but refusals.")
+  @Option(names = "--quiet", description = "Print nothing but a refusal (default: off).")
   private boolean quiet;
 
   @Option(names = "--reuse", paramLabel = "FOLDER", hidden = true)
@@ -89,10 +99,8 @@ final class AnalyseCommand implements Callable<Integer> {
   public Integer call() {
     refuseWhatIsMissing();
     SessionFiles files = new SessionFiles(recording, events, plan, regions, traces);
-    RunSettings settings =
-        new RunSettings(
-            threads == null ? Runtime.getRuntime().availableProcessors() : threads,
-            Scratch.ofThisMachine());
+    RunSettings machine = RunSettings.ofThisMachine();
+    RunSettings settings = threads == null ? machine : machine.withThreads(threads);
     AnalysisOutcome outcome;
     try (ProgressLine progress = ProgressLine.onTerminal(quiet)) {
       outcome = SessionAnalysis.run(files, out, settings, progress);
@@ -112,8 +120,8 @@ final class AnalyseCommand implements Callable<Integer> {
           .remedy("leave it out to use all processors");
     }
     if (reuse != null || pdf) {
-      throw RefusedInput.because("this version does not have the option")
-          .at(pdf ? "--pdf" : "--reuse")
+      throw RefusedInput.because("the option is not available in this version")
+          .at(reuse != null ? "--reuse" : "--pdf")
           .remedy("leave it out");
     }
   }

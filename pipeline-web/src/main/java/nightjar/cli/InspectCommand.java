@@ -27,26 +27,51 @@ import picocli.CommandLine.Spec;
           + " alone, or together.",
       ""
     },
-    footer = {"", "Example:", "  ./nightjar inspect --recording scan.nc --events scan_events.tsv"})
+    exitCodeListHeading = "%nExit codes:%n",
+    exitCodeList = {
+      "0:nothing would be refused",
+      "2:something would be refused, one sentence each; or the command line was refused",
+      "3:the inspection failed; an incident was logged"
+    },
+    footer = {
+      "",
+      "Example:",
+      "  ./nightjar inspect --recording scan.nc --events scan_events.tsv \\",
+      "      --plan configs/whisker-puff.yaml --json"
+    })
 final class InspectCommand implements Callable<Integer> {
-  @Option(names = "--recording", paramLabel = "FILE", description = "Recording, NetCDF.")
+  @Option(
+      names = "--recording",
+      paramLabel = "FILE",
+      description = "Power-Doppler recording, NetCDF (default: none).")
   private @Nullable Path recording;
 
-  @Option(names = "--events", paramLabel = "FILE", description = "Event table.")
+  @Option(
+      names = "--events",
+      paramLabel = "FILE",
+      description = "Event table with onset, duration (s) and trial_type (default: none).")
   private @Nullable Path events;
 
-  @Option(names = "--plan", paramLabel = "FILE", description = "Plan, YAML.")
+  @Option(names = "--plan", paramLabel = "FILE", description = "Plan, YAML (default: none).")
   private @Nullable Path plan;
 
-  @Option(names = "--regions", paramLabel = "FILE", description = "Label file or polygons.")
+  @Option(
+      names = "--regions",
+      paramLabel = "FILE",
+      description = "Label file (NetCDF) or polygons (JSON, mm) (default: none).")
   private @Nullable Path regions;
 
-  @Option(names = "--traces", paramLabel = "FILE", description = "Continuous traces.")
+  @Option(
+      names = "--traces",
+      paramLabel = "FILE",
+      description = "Continuous traces with their time (s) (default: none).")
   private @Nullable Path traces;
 
   @Option(
       names = "--json",
-      description = "The same as JSON, with the heap and scratch space (MB) that a run needs.")
+      description =
+          "The same as JSON, with the heap and scratch space (MB) that a run needs as heap_mb and"
+              + " scratch_mb (default: off).")
   private boolean json;
 
   @Spec private @Nullable CommandSpec spec;

@@ -19,7 +19,7 @@ import picocli.CommandLine.ParameterException;
     footer = {
       "",
       "Exit codes: 0 done; 2 the input or the command line was refused; 3 the analysis failed;"
-          + " 130 interrupted.",
+          + " 130 interrupted. 'nightjar COMMAND --help' explains a command.",
       "",
       "For research. The local animal-welfare body and the licence decide on animal work. A"
           + " significant map is not a verdict on a recording: read the verdict first."
@@ -42,7 +42,17 @@ public final class Nightjar implements Runnable {
 
   /** Runs a command and exits with its code. */
   public static void main(String[] arguments) {
-    System.exit(commandLine().execute(arguments));
+    System.exit(run(commandLine(), arguments));
+  }
+
+  /** The exit code of a command; faults that are no exceptions are incidents too. */
+  static int run(CommandLine line, String... arguments) {
+    try {
+      return line.execute(arguments);
+    } catch (Error e) {
+      line.getErr().println(Incident.record(e));
+      return FAILED;
+    }
   }
 
   /** The parser with our ways of telling what went wrong. */

@@ -1,9 +1,11 @@
 package nightjar.cli;
 
+import java.time.Duration;
+import java.util.Locale;
 import me.tongfei.progressbar.ConsoleProgressBarConsumer;
 import me.tongfei.progressbar.ProgressBar;
 import me.tongfei.progressbar.ProgressBarBuilder;
-import me.tongfei.progressbar.ProgressBarStyle;
+import me.tongfei.progressbar.ProgressState;
 import nightjar.analysis.StageListener;
 import nightjar.recording.Progress;
 import org.jspecify.annotations.Nullable;
@@ -14,6 +16,7 @@ import org.jspecify.annotations.Nullable;
  */
 final class ProgressLine implements StageListener, AutoCloseable {
   private static final int STEPS = 1000;
+  private static final int BAR = 30;
 
   private final @Nullable ProgressBar bar;
   private double before;
@@ -30,20 +33,44 @@ final class ProgressLine implements StageListener, AutoCloseable {
     return new ProgressLine(
         new ProgressBarBuilder()
             .setInitialMax(STEPS)
-            .setTaskName("opening")
-            .setStyle(ProgressBarStyle.ASCII)
+            .setRenderer((state, width) -> cut(line(state), width))
             .setConsumer(new ConsoleProgressBarConsumer(System.err))
             .setUpdateIntervalMillis(200)
-            .setEtaFunction(
-                state ->
-                    state.getCurrent() <= 0
-                        ? java.util.Optional.empty()
-                        : java.util.Optional.of(
-                            state
-                                .getElapsedAfterStart()
-                                .multipliedBy(STEPS - state.getCurrent())
-                                .dividedBy(state.getCurrent())))
             .build());
+  }
+
+  private static String cut(String line, int width) {
+    return line.substring(0, Math.min(line.length(), Math.max(0, width)));
+  }
+
+  private static String line(ProgressState state) {
+    String stage = state.getExtraMessage();
+    return line(
+        stage == null ? "" : stage,
+        (double) state.getCurrent() / STEPS,
+        state.getElapsedAfterStart());
+  }
+
+  /**
+   * The line's text.
+   *
+   * @param share of the whole run done, 0 to 1
+   */
+  static String line(String stage, double share, Duration elapsed) {
+    int full = (int) Math.round(BAR * share);
+    String text =
+        String.format(
+            Locale.ROOT,
+            "[%s%s] %3d %%  %s",
+            "=".repeat(full),
+            " ".repeat(BAR - full),
+            Math.round(100 * share),
+            stage);
+    if (share <= 0 || share >= 1) {
+      return text;
+    }
+    long left = Math.round(elapsed.toMillis() / 1000.0 * (1 - share) / share);
+    return text + String.format(Locale.ROOT, ", %d:%02d left", left / 60, left % 60);
   }
 
   @Override
@@ -56,6 +83,7 @@ final class ProgressLine implements StageListener, AutoCloseable {
     }
     double begin = before;
     line.setExtraMessage(name);
+    line.stepTo(Math.round(STEPS * Math.min(1, begin)));
     return done -> line.stepTo(Math.round(STEPS * Math.min(1, begin + share * done)));
   }
 
