@@ -1,10 +1,12 @@
 package nightjar.cli;
 
+import java.util.ArrayList;
 import java.util.List;
 import java.util.Locale;
 import java.util.Map;
 import java.util.stream.Collectors;
 import nightjar.analysis.Inspection;
+import org.jspecify.annotations.Nullable;
 
 /** An inspection for reading. */
 final class InspectionText {
@@ -47,10 +49,10 @@ final class InspectionText {
     String shown =
         value instanceof Map<?, ?> m
             ? m.entrySet().stream()
-                .map(e -> e.getKey() + " " + e.getValue())
+                .map(e -> e.getKey() + " " + plain(e.getValue()))
                 .collect(Collectors.joining(", "))
             : value instanceof List<?> l
-                ? l.stream().map(String::valueOf).collect(Collectors.joining(", "))
+                ? l.stream().map(InspectionText::plain).collect(Collectors.joining(", "))
                 : plain(value);
     text.append("  ")
         .append(label)
@@ -67,12 +69,12 @@ final class InspectionText {
             .findFirst()
             .map(m -> ((Map<?, ?>) m).keySet().stream().map(String::valueOf).toList())
             .orElse(List.of());
-    List<String> header = new java.util.ArrayList<>(List.of("name"));
+    List<String> header = new ArrayList<>(List.of("name"));
     keys.forEach(k -> header.add(label(k)));
     TextTable table = new TextTable(header);
     rows.forEach(
         (name, row) -> {
-          List<String> cells = new java.util.ArrayList<>(List.of(String.valueOf(name)));
+          List<String> cells = new ArrayList<>(List.of(String.valueOf(name)));
           if (row instanceof Map<?, ?> m) {
             m.values().forEach(v -> cells.add(plain(v)));
           }
@@ -81,7 +83,7 @@ final class InspectionText {
     return table.toString();
   }
 
-  private static String plain(Object value) {
+  private static String plain(@Nullable Object value) {
     if (value instanceof Double d && d == Math.rint(d) && Math.abs(d) < 1e9) {
       return Long.toString(d.longValue());
     }
