@@ -48,8 +48,7 @@ class NightjarTest {
   @ParameterizedTest
   @ValueSource(strings = {"analyse", "inspect", "demo"})
   void everyOptionThatMayBeLeftOutTellsItsDefault(String command) {
-    CommandLine line =
-        Objects.requireNonNull(Nightjar.commandLine().getSubcommands().get(command));
+    CommandLine line = Objects.requireNonNull(Nightjar.commandLine().getSubcommands().get(command));
     for (OptionSpec option : line.getCommandSpec().options()) {
       boolean told = String.join(" ", option.description()).contains("default");
       assertTrue(

@@ -11,7 +11,7 @@ class ProgressLineTest {
   @Test
   void theLineHasStageShareAndRemainingTime() {
     assertEquals(
-        "[=======                       ]  25 %  aligning, 1:30 left",
+        "[========                      ]  25 %  aligning, 1:30 left",
         ProgressLine.line("aligning", 0.25, Duration.ofSeconds(30)));
   }
 
