@@ -37,6 +37,12 @@ final class Registration {
   /** A start that differs less from rest than this needs no second start. */
   private static final double NEAR_VOXELS = 1.5;
 
+  /**
+   * A result that leaves residuals larger by more than this than the start has gone astray. A
+   * smaller difference is chance, since the steps make weighted squares small and not the median.
+   */
+  private static final double WORSE = 1.2;
+
   private static final int MEDIAN_SAMPLES = 4096;
 
   private final Template template;
@@ -115,7 +121,7 @@ final class Registration {
       }
     }
     double scale = scale();
-    return scale <= startScale ? new Fit(pose, scale) : new Fit(start, startScale);
+    return scale <= WORSE * startScale ? new Fit(pose, scale) : new Fit(start, startScale);
   }
 
   /** Sampled values minus the reference at the present gain and offset; 0 where not in sight. */

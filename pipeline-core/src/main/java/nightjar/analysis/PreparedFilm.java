@@ -47,7 +47,7 @@ record PreparedFilm(
     PercentSeries series,
     List<Warning> warnings)
     implements AutoCloseable {
-  private static final int TYPICAL_FRAMES = 31;
+  private static final int TYPICAL_FRAMES = 101;
 
   /** Runs the stages; the aligned film is freed before this returns. */
   static PreparedFilm of(OpenedSession session, Machine machine) {

@@ -70,12 +70,7 @@ public final class GrossPass {
     float[] image = TypicalImage.median(source, sample(good, imageFrames), workers);
     progress.report(0.9);
     List<Integer> typical =
-        TypicalImage.nearestFirst(
-            source,
-            sample(good, CANDIDATES),
-            image,
-            FlooredLog.ofMedianPower(medianPower),
-            workers);
+        TypicalImage.nearestFirst(source, sample(good, CANDIDATES), image, medianPower, workers);
     progress.report(1);
     return new GrossPass(sums, passed, medianPower, image, typical);
   }

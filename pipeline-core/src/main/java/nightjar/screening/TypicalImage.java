@@ -43,9 +43,14 @@ final class TypicalImage {
     return median;
   }
 
-  /** The given frames, the nearest to {@code image} first. */
+  /**
+   * The given frames, the nearest to {@code image} first. Only voxels of at least {@code
+   * medianPower} are compared: in dim ones outside the brain logarithms show the noise alone.
+   */
   static List<Integer> nearestFirst(
-      FrameSource source, int[] frames, float[] image, FlooredLog log, Workers workers) {
+      FrameSource source, int[] frames, float[] image, double medianPower, Workers workers) {
+    FlooredLog log = FlooredLog.ofMedianPower(medianPower);
+    int[] bright = IntStream.range(0, image.length).filter(v -> image[v] >= medianPower).toArray();
     double[] distance = new double[frames.length];
     workers.forEachBlock(
         frames.length,
@@ -54,7 +59,7 @@ final class TypicalImage {
           float[] frame = new float[image.length];
           for (int i = first; i < end; i++) {
             source.read(frames[i], 1, frame, 0);
-            distance[i] = distance(frame, image, log);
+            distance[i] = distance(frame, image, bright, log);
           }
         });
     return IntStream.range(0, frames.length)
@@ -65,10 +70,10 @@ final class TypicalImage {
   }
 
   /** Mean square difference of ln(power) over the voxels that both have. */
-  private static double distance(float[] frame, float[] image, FlooredLog log) {
+  private static double distance(float[] frame, float[] image, int[] voxels, FlooredLog log) {
     double sum = 0;
     int values = 0;
-    for (int v = 0; v < frame.length; v++) {
+    for (int v : voxels) {
       double d = log.of(frame[v]) - log.of(image[v]);
       if (!Double.isNaN(d)) {
         sum += d * d;

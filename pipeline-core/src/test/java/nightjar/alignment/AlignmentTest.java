@@ -248,7 +248,7 @@ class AlignmentTest {
         // What is filled in is not what was there: twice the usual margin.
         RigidMotion found = film.motion().at(t, 0);
         RigidMotion want = SHIFTS.get(t);
-        assertEquals(want.shiftDepthMillimetres(), found.shiftDepthMillimetres(), 2 * CLOSE);
+        assertEquals(want.shiftDepthMillimetres(), found.shiftDepthMillimetres(), 3 * CLOSE);
         assertEquals(want.shiftLateralMillimetres(), found.shiftLateralMillimetres(), 2 * CLOSE);
       }
     }
@@ -307,10 +307,10 @@ class AlignmentTest {
     try (AlignedFilm film = source.align(Model.TRANSLATION, Scope.PLANE)) {
       assertEquals(6, film.motion().units());
       // A depth tilt of 1 degree moves the outermost planes, 0.5 mm from the centre, in depth
-      // (and their content a little out of the plane: hence twice the usual margin).
+      // (and their content a little out of the plane: hence three times the usual margin).
       double tilted = 0.5 * Math.sin(Math.toRadians(1));
-      assertEquals(-tilted, film.motion().at(3, 0).shiftDepthMillimetres(), 2 * CLOSE);
-      assertEquals(tilted, film.motion().at(3, 5).shiftDepthMillimetres(), 2 * CLOSE);
+      assertEquals(-tilted, film.motion().at(3, 0).shiftDepthMillimetres(), 3 * CLOSE);
+      assertEquals(tilted, film.motion().at(3, 5).shiftDepthMillimetres(), 3 * CLOSE);
     }
   }
 
