@@ -3,7 +3,7 @@ package nightjar.alignment;
 import java.util.List;
 import nightjar.film.FloatRows;
 import nightjar.film.Scratch;
-import nightjar.numeric.Selection;
+import nightjar.numeric.Median;
 import nightjar.numeric.Workers;
 import nightjar.recording.FrameSource;
 import nightjar.recording.Mask;
@@ -147,7 +147,7 @@ final class ReferenceImage {
               }
             }
             medians[from + v] =
-                2 * found > rows.rows() ? (float) Selection.median(values, found) : Float.NaN;
+                2 * found > rows.rows() ? (float) Median.selecting(values, found) : Float.NaN;
           }
         });
     return medians;

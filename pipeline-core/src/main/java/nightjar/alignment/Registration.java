@@ -1,6 +1,6 @@
 package nightjar.alignment;
 
-import nightjar.numeric.Selection;
+import nightjar.numeric.Median;
 
 /**
  * Finds how the content of a frame is displaced from the reference: inverse compositional
@@ -143,7 +143,7 @@ final class Registration {
         sorted[found++] = Math.abs(residuals[k]);
       }
     }
-    return SD_PER_MEDIAN_DEVIATION * Selection.median(sorted, found);
+    return SD_PER_MEDIAN_DEVIATION * Median.selecting(sorted, found);
   }
 
   private void weigh(double limit) {

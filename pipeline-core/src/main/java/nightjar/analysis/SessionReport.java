@@ -17,8 +17,11 @@ import nightjar.report.MethodsFacts;
 import nightjar.report.MethodsText;
 import nightjar.report.ReportContent;
 import nightjar.report.ReportPage;
+import nightjar.report.ReportedFrames;
+import nightjar.report.ReportedRegions;
 import nightjar.results.ColumnMean;
 import nightjar.results.Findings;
+import nightjar.results.FrameFindings;
 import nightjar.results.MapFindings;
 import nightjar.results.MapPeak;
 import nightjar.results.RegionFindings;
@@ -210,7 +213,7 @@ final class SessionReport {
     return f;
   }
 
-  private nightjar.report.RegionFindings regions() {
+  private ReportedRegions regions() {
     RegionFindings r = findings.regions();
     KeptFrames kept = findings.frames().kept();
     double[][] courses = r.fits().timeCourses();
@@ -223,13 +226,13 @@ final class SessionReport {
       }
       series.add(new NamedSeries(r.fits().name(i), all));
     }
-    return new nightjar.report.RegionFindings(r.contrasts(), r.responses().bins(), series);
+    return new ReportedRegions(r.contrasts(), r.responses().bins(), series);
   }
 
-  private nightjar.report.FrameFindings frames() {
-    nightjar.results.FrameFindings f = findings.frames();
+  private ReportedFrames frames() {
+    FrameFindings f = findings.frames();
     int n = f.kept().frames();
-    return new nightjar.report.FrameFindings(
+    return new ReportedFrames(
         f.kept(),
         f.motion(),
         session.stimuli(),

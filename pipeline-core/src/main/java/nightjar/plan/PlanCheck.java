@@ -10,6 +10,7 @@ import nightjar.design.ModelledStimulus;
 import nightjar.design.StimulusSettings;
 import nightjar.glm.Contrast;
 import nightjar.recording.EventTable;
+import nightjar.refusal.NearestName;
 import nightjar.refusal.RefusedInput;
 
 /** Holds a plan against an event table. */

@@ -24,8 +24,8 @@ public record ReportContent(
     List<String> warnings,
     List<Fact> facts,
     BrainMaps maps,
-    RegionFindings regions,
-    FrameFindings frames,
+    ReportedRegions regions,
+    ReportedFrames frames,
     DesignMatrix design,
     double level,
     String methods) {

@@ -16,11 +16,11 @@ final class Timeline {
   private static final double WIDTH = 900;
   private static final double HEIGHT = 170;
 
-  private final FrameFindings frames;
+  private final ReportedFrames frames;
   private final List<Span> spans = new ArrayList<>();
   private final List<Double> rejected;
 
-  Timeline(FrameFindings frames) {
+  Timeline(ReportedFrames frames) {
     this.frames = frames;
     FrameTimes times = frames.kept().times();
     frames

@@ -9,8 +9,10 @@ import java.util.ArrayList;
 import java.util.Arrays;
 import java.util.HashSet;
 import java.util.List;
+import java.util.Optional;
 import java.util.Set;
 import java.util.function.Consumer;
+import nightjar.refusal.NearestName;
 import nightjar.refusal.RefusedInput;
 import org.apache.commons.csv.CSVFormat;
 import org.apache.commons.csv.CSVParser;
@@ -179,13 +181,13 @@ final class DelimitedText {
     List<String> others =
         columns.stream().filter(c -> !c.isEmpty() && !wanted.contains(c)).toList();
     RefusedInput refusal = refusal("the column " + name + " is missing", headerLine).expected(all);
-    if (others.isEmpty()) {
+    Optional<String> nearest = NearestName.of(name, others).map(WholeText::shown);
+    if (nearest.isEmpty()) {
       return refuse(refusal.remedy("add the column, or the header line if there is none"));
     }
-    String nearest = WholeText.shown(Similarity.nearest(name, others));
     return refuse(
         refusal
-            .found("as the nearest " + nearest)
+            .found("as the nearest " + nearest.get())
             .remedy("rename that column to " + name + ", or add a column " + name));
   }
 

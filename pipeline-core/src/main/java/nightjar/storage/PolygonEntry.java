@@ -5,6 +5,7 @@ import java.nio.file.Path;
 import java.util.List;
 import java.util.regex.Pattern;
 import nightjar.recording.Grid;
+import nightjar.refusal.NearestName;
 import nightjar.refusal.RefusedInput;
 
 /**
@@ -45,7 +46,10 @@ record PolygonEntry(String name, int plane, Polygon polygon) {
         throw refusal("there is an unknown key")
             .found(WholeText.shown(key))
             .expected(String.join(", ", KEYS))
-            .remedy("rename or delete it; the nearest is " + Similarity.nearest(key, KEYS));
+            .remedy(
+                NearestName.of(key, KEYS)
+                    .map(n -> "rename it, did you mean " + n)
+                    .orElse("delete it"));
       }
     }
 

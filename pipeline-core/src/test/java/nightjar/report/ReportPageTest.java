@@ -127,8 +127,8 @@ class ReportPageTest {
                 List.of(),
                 List.of(),
                 bare,
-                RegionFindings.NONE,
-                new FrameFindings(
+                ReportedRegions.NONE,
+                new ReportedFrames(
                     s.kept, FrameMotion.none(SampleReport.FRAMES, 1), List.of(), List.of()),
                 c.design(),
                 0.05,

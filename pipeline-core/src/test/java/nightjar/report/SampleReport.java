@@ -149,7 +149,7 @@ final class SampleReport {
     return new ContrastMap(summary, effect, t, q);
   }
 
-  RegionFindings regions() {
+  ReportedRegions regions() {
     List<RegionContrast> rows = new ArrayList<>();
     for (String c : List.of("left_over_sham", "right_over_sham")) {
       rows.add(row("barrel_left", c, c.startsWith("left") ? 0.21 : 7.9, 0.4));
@@ -174,7 +174,7 @@ final class SampleReport {
       }
       courses.add(new NamedSeries(r, v));
     }
-    return new RegionFindings(rows, bins, courses);
+    return new ReportedRegions(rows, bins, courses);
   }
 
   private static RegionContrast row(String region, String contrast, double effect, double se) {
@@ -184,7 +184,7 @@ final class SampleReport {
         region, 149, contrast, effect, se, effect - 2 * se, effect + 2 * se, t, 512.3, p, p);
   }
 
-  FrameFindings frames() {
+  ReportedFrames frames() {
     List<List<RigidMotion>> motions = new ArrayList<>();
     double[][] displacement = new double[FRAMES][grid.planes().size()];
     for (int t = 0; t < FRAMES; t++) {
@@ -198,7 +198,7 @@ final class SampleReport {
     }
     double[] power = IntStream.range(0, FRAMES).mapToDouble(t -> 8 + 0.01 * noise()).toArray();
     double[] change = IntStream.range(0, FRAMES).mapToDouble(t -> 0.2 + 0.01 * noise()).toArray();
-    return new FrameFindings(
+    return new ReportedFrames(
         kept,
         new FrameMotion(false, motions, displacement),
         stimuli,

@@ -1,29 +1,31 @@
-package nightjar.plan;
+package nightjar.refusal;
 
 import java.util.Collection;
 import java.util.Comparator;
+import java.util.Locale;
 import java.util.Optional;
 
 /** The known name that a mistyped one is likely to mean. */
-final class NearestName {
-  /** No name of ours is longer; the table of distances stays small. */
-  private static final int LONGEST = 64;
+public final class NearestName {
+  /** Longer names are compared by their beginning, which keeps the table of distances small. */
+  private static final int LONGEST = 100;
 
   private NearestName() {}
 
   /** The nearest by edit distance [Levenshtein 1966, Sov Phys Dokl 10:707], if near at all. */
-  static Optional<String> of(String name, Collection<String> known) {
-    if (name.length() > LONGEST) {
-      return Optional.empty();
-    }
+  public static Optional<String> of(String name, Collection<String> known) {
     return known.stream()
-        .filter(k -> k.length() <= LONGEST)
         .min(Comparator.comparingInt((String k) -> distance(name, k)).thenComparing(k -> k))
         .filter(k -> distance(name, k) <= Math.max(2, k.length() / 2));
   }
 
-  /** Insertions, deletions, replacements and swaps of neighbours, each counted as one. */
-  static int distance(String a, String b) {
+  /**
+   * Insertions, deletions, replacements and swaps of neighbours, each counted as one; capitals do
+   * not count.
+   */
+  static int distance(String name, String other) {
+    String a = folded(name);
+    String b = folded(other);
     int[][] d = new int[a.length() + 1][b.length() + 1];
     for (int i = 0; i <= a.length(); i++) {
       for (int j = 0; j <= b.length(); j++) {
@@ -42,5 +44,9 @@ final class NearestName {
       }
     }
     return d[a.length()][b.length()];
+  }
+
+  private static String folded(String s) {
+    return s.substring(0, Math.min(LONGEST, s.length())).toLowerCase(Locale.ROOT);
   }
 }

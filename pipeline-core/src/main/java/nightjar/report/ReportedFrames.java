@@ -15,12 +15,12 @@ import nightjar.recording.NamedSeries;
  * @param screening the measures that frames were judged by, one value a frame: {@code log_power},
  *     {@code change}
  */
-public record FrameFindings(
+public record ReportedFrames(
     KeptFrames kept,
     FrameMotion motion,
     List<ModelledStimulus> stimuli,
     List<NamedSeries> screening) {
-  public FrameFindings {
+  public ReportedFrames {
     stimuli = List.copyOf(stimuli);
     screening = List.copyOf(screening);
   }

@@ -13,12 +13,12 @@ import nightjar.regions.ResponseBin;
  * @param timeCourses percent, drift and nuisance removed, one value a frame of the recording, NaN
  *     at rejected frames
  */
-public record RegionFindings(
+public record ReportedRegions(
     List<RegionContrast> contrasts, List<ResponseBin> responses, List<NamedSeries> timeCourses) {
   /** No regions. */
-  public static final RegionFindings NONE = new RegionFindings(List.of(), List.of(), List.of());
+  public static final ReportedRegions NONE = new ReportedRegions(List.of(), List.of(), List.of());
 
-  public RegionFindings {
+  public ReportedRegions {
     contrasts = List.copyOf(contrasts);
     responses = List.copyOf(responses);
     timeCourses = List.copyOf(timeCourses);

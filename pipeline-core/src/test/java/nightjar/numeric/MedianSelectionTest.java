@@ -7,7 +7,7 @@ import java.util.Arrays;
 import java.util.Random;
 import org.junit.jupiter.api.Test;
 
-class SelectionTest {
+class MedianSelectionTest {
   @Test
   void agreesWithSorting() {
     Random random = new Random(8);
@@ -22,12 +22,12 @@ class SelectionTest {
       double[] sorted = Arrays.copyOf(a, n);
       Arrays.sort(sorted);
       double want = 0.5 * (sorted[(n - 1) / 2] + sorted[n / 2]);
-      assertEquals(want, Selection.median(a, n), "seed 8, draw " + i);
+      assertEquals(want, Median.selecting(a, n), "seed 8, draw " + i);
     }
   }
 
   @Test
   void hasNoMedianOfNothing() {
-    assertTrue(Double.isNaN(Selection.median(new double[] {1}, 0)));
+    assertTrue(Double.isNaN(Median.selecting(new double[] {1}, 0)));
   }
 }
