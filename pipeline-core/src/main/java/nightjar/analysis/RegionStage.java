@@ -20,6 +20,7 @@ final class RegionStage {
     KeptFrames kept = film.judgement().kept();
     RegionModel regionModel =
         new RegionModel(
+            model.models().get(0),
             model.design(),
             model.request(),
             session.offsets(),

@@ -7,6 +7,8 @@ import java.time.Clock;
 import java.time.Instant;
 import java.util.ArrayList;
 import java.util.List;
+import java.util.concurrent.CompletableFuture;
+import java.util.concurrent.CompletionException;
 import nightjar.numeric.Workers;
 import nightjar.recording.Progress;
 import nightjar.results.Findings;
@@ -28,9 +30,10 @@ import nightjar.verdict.Verdict;
 public final class SessionAnalysis {
   private final OpenedSession session;
   private final Machine machine;
-  private final Provenance provenance;
+  private final CompletableFuture<Provenance> provenance;
 
-  private SessionAnalysis(OpenedSession session, Machine machine, Provenance provenance) {
+  private SessionAnalysis(
+      OpenedSession session, Machine machine, CompletableFuture<Provenance> provenance) {
     this.session = session;
     this.machine = machine;
     this.provenance = provenance;
@@ -54,7 +57,9 @@ public final class SessionAnalysis {
         ResultFolder folder = ResultFolder.begin(out);
         Workers workers = new Workers(settings.threads())) {
       Machine machine = new Machine(workers, settings.scratch(), stages);
-      Provenance provenance = session.provenance(files);
+      // Checksums take a pass over the recording; nobody waits for them until the end.
+      CompletableFuture<Provenance> provenance =
+          CompletableFuture.supplyAsync(() -> session.provenance(files));
       opening.report(1);
       AnalysisOutcome outcome = new SessionAnalysis(session, machine, provenance).writeInto(folder);
       RunRecord run = new RunRecord(begun, host(), settings.threads(), stages.end());
@@ -82,13 +87,27 @@ public final class SessionAnalysis {
                   session, frames, maps.order(), model.models(), model.fit().residualSd()),
               session.plan().verdict());
       Findings findings =
-          new Findings(provenance, frames, maps, regions, verdict, warnings(film, model));
+          new Findings(join(provenance), frames, maps, regions, verdict, warnings(film, model));
       Progress writing = machine.stages().begin("writing", StageShares.WRITING);
+      CompletableFuture<Boolean> report =
+          CompletableFuture.supplyAsync(() -> SessionReport.write(findings, session, folder));
       SessionResults.write(findings, folder);
       writing.report(0.5);
-      SessionReport.write(findings, session, folder);
+      join(report);
       writing.report(1);
       return outcome(findings);
+    }
+  }
+
+  /** The result, or the exception that the work itself threw. */
+  private static <T> T join(CompletableFuture<T> work) {
+    try {
+      return work.join();
+    } catch (CompletionException e) {
+      if (e.getCause() instanceof RuntimeException cause) {
+        throw cause;
+      }
+      throw e;
     }
   }
 

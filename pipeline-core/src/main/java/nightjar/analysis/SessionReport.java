@@ -42,12 +42,13 @@ final class SessionReport {
     this.session = session;
   }
 
-  /** Writes {@code methods.md} and {@code report.html}. */
-  static void write(Findings findings, OpenedSession session, ResultFolder folder) {
+  /** Writes {@code methods.md} and {@code report.html}; true when both are there. */
+  static boolean write(Findings findings, OpenedSession session, ResultFolder folder) {
     SessionReport r = new SessionReport(findings, session);
     String methods = MethodsText.of(r.methods());
     SessionResults.writeText(folder, "methods.md", methods);
     SessionResults.writeText(folder, "report.html", ReportPage.render(r.content(methods)));
+    return true;
   }
 
   private MethodsFacts methods() {

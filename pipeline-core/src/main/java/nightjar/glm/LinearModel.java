@@ -25,24 +25,30 @@ public final class LinearModel {
       ExpectedCorrelation expected, CorrelationVariance variance, PrecisionWeights weights) {}
 
   private LinearModel(
-      DesignBasis basis, double[][] contrasts, double[][] estimates, NoiseSettings noise) {
+      DesignBasis basis,
+      DesignMoments moments,
+      double[][] contrasts,
+      double[][] estimates,
+      NoiseSettings noise,
+      Optional<FirstOrderNoise> firstOrder) {
     this.basis = basis;
+    this.moments = moments;
     this.contrasts = contrasts;
     this.estimates = estimates;
     this.noise = noise;
-    RowLinks links = RowLinks.of(basis.kept());
-    this.moments = new DesignMoments(basis, links);
-    if (noise.model() == NoiseSettings.Model.AR1) {
-      ExpectedCorrelation expected = new ExpectedCorrelation(moments);
-      this.firstOrder =
-          Optional.of(
-              new FirstOrderNoise(
-                  expected,
-                  new CorrelationVariance(moments, expected),
-                  new PrecisionWeights(links)));
-    } else {
-      this.firstOrder = Optional.empty();
+    this.firstOrder = firstOrder;
+  }
+
+  private static Optional<FirstOrderNoise> firstOrder(DesignMoments moments, NoiseSettings noise) {
+    if (noise.model() != NoiseSettings.Model.AR1) {
+      return Optional.empty();
     }
+    ExpectedCorrelation expected = new ExpectedCorrelation(moments);
+    return Optional.of(
+        new FirstOrderNoise(
+            expected,
+            new CorrelationVariance(moments, expected),
+            new PrecisionWeights(moments.links())));
   }
 
   /**
@@ -67,7 +73,14 @@ public final class LinearModel {
     for (String name : estimates) {
       e.add(basis.coefficient(column(design, name, "estimate")));
     }
-    return new LinearModel(basis, c.toArray(double[][]::new), e.toArray(double[][]::new), noise);
+    DesignMoments moments = new DesignMoments(basis, RowLinks.of(basis.kept()));
+    return new LinearModel(
+        basis,
+        moments,
+        c.toArray(double[][]::new),
+        e.toArray(double[][]::new),
+        noise,
+        firstOrder(moments, noise));
   }
 
   private static int column(DesignMatrix design, String name, String place) {
@@ -80,6 +93,19 @@ public final class LinearModel {
           .remedy("name a stimulus or another column that the model holds");
     }
     return j;
+  }
+
+  /**
+   * The same model with other coefficients asked for; what is costly is shared.
+   *
+   * @throws RefusedInput where the design lacks a column
+   */
+  public LinearModel withEstimates(List<String> names) {
+    double[][] e =
+        names.stream()
+            .map(name -> basis.coefficient(column(basis.design(), name, "estimate")))
+            .toArray(double[][]::new);
+    return new LinearModel(basis, moments, contrasts, e, noise, firstOrder);
   }
 
   /** The basis of the design. */

@@ -41,22 +41,22 @@ public final class RegionFits {
   public static RegionFits of(RegionModel model, RegionSeries series, Workers workers) {
     List<Glm.Part> parts = new ArrayList<>();
     List<DesignMatrix> designs = new ArrayList<>();
-    LinearModel shared = null;
     for (int r = 0; r < series.size(); r++) {
+      boolean swept = model.design().isSwept();
       DesignMatrix design =
-          model.design().isSwept()
+          swept
               ? DesignMatrix.average(model.design().planes(), series.planeShares(r))
               : model.design().ofPlane(0);
-      if (shared == null || model.design().isSwept()) {
-        shared =
-            LinearModel.of(
-                DesignBasis.of(design, model.kept()),
-                model.contrasts(),
-                design.names(),
-                model.noise());
-      }
       designs.add(design);
-      parts.add(new Glm.Part(shared, r, r + 1));
+      LinearModel own =
+          swept
+              ? LinearModel.of(
+                  DesignBasis.of(design, model.kept()),
+                  model.contrasts(),
+                  design.names(),
+                  model.noise())
+              : model.voxelModel().withEstimates(design.names());
+      parts.add(new Glm.Part(own, r, r + 1));
     }
     GlmFit fit =
         parts.isEmpty()

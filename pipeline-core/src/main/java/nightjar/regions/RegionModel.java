@@ -4,6 +4,7 @@ import java.util.List;
 import nightjar.design.DesignRequest;
 import nightjar.design.SessionDesign;
 import nightjar.glm.Contrast;
+import nightjar.glm.LinearModel;
 import nightjar.glm.NoiseSettings;
 import nightjar.inference.InferenceSettings;
 import nightjar.recording.KeptFrames;
@@ -12,6 +13,8 @@ import nightjar.recording.PlaneOffsets;
 /**
  * The session's model as it is fitted to regions.
  *
+ * @param voxelModel what voxels (of the first plane, where planes have clocks of their own) were
+ *     fitted with
  * @param design columns, one design or one a plane
  * @param request what the design was made from
  * @param offsets the planes' clocks
@@ -21,6 +24,7 @@ import nightjar.recording.PlaneOffsets;
  * @param inference adjustment over regions
  */
 public record RegionModel(
+    LinearModel voxelModel,
     SessionDesign design,
     DesignRequest request,
     PlaneOffsets offsets,

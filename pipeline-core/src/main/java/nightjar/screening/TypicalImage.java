@@ -1,5 +1,6 @@
 package nightjar.screening;
 
+import java.util.Arrays;
 import java.util.Comparator;
 import java.util.List;
 import java.util.stream.IntStream;
@@ -51,6 +52,7 @@ final class TypicalImage {
       FrameSource source, int[] frames, float[] image, double medianPower, Workers workers) {
     FlooredLog log = FlooredLog.ofMedianPower(medianPower);
     int[] bright = IntStream.range(0, image.length).filter(v -> image[v] >= medianPower).toArray();
+    double[] reference = Arrays.stream(bright).mapToDouble(v -> log.of(image[v])).toArray();
     double[] distance = new double[frames.length];
     workers.forEachBlock(
         frames.length,
@@ -59,7 +61,7 @@ final class TypicalImage {
           float[] frame = new float[image.length];
           for (int i = first; i < end; i++) {
             source.read(frames[i], 1, frame, 0);
-            distance[i] = distance(frame, image, bright, log);
+            distance[i] = distance(frame, bright, reference, log);
           }
         });
     return IntStream.range(0, frames.length)
@@ -70,11 +72,11 @@ final class TypicalImage {
   }
 
   /** Mean square difference of ln(power) over the voxels that both have. */
-  private static double distance(float[] frame, float[] image, int[] voxels, FlooredLog log) {
+  private static double distance(float[] frame, int[] voxels, double[] reference, FlooredLog log) {
     double sum = 0;
     int values = 0;
-    for (int v : voxels) {
-      double d = log.of(frame[v]) - log.of(image[v]);
+    for (int k = 0; k < voxels.length; k++) {
+      double d = log.of(frame[voxels[k]]) - reference[k];
       if (!Double.isNaN(d)) {
         sum += d * d;
         values++;

@@ -10,6 +10,7 @@ import java.util.Map;
 import java.util.SplittableRandom;
 import java.util.function.IntToDoubleFunction;
 import java.util.stream.IntStream;
+import nightjar.design.DesignBasis;
 import nightjar.design.DesignRequest;
 import nightjar.design.DriftSettings;
 import nightjar.design.GammaKernel;
@@ -18,6 +19,7 @@ import nightjar.design.SessionDesign;
 import nightjar.film.FloatRows;
 import nightjar.film.Scratch;
 import nightjar.glm.Contrast;
+import nightjar.glm.LinearModel;
 import nightjar.glm.NoiseSettings;
 import nightjar.inference.InferenceSettings;
 import nightjar.numeric.Workers;
@@ -52,6 +54,9 @@ class RegionFitsTest {
   private static final List<Trial> SHAM =
       List.of(trial("sham", 14), trial("sham", 70), trial("sham", 104), trial("sham", 175));
 
+  private static final List<Contrast> CONTRASTS =
+      List.of(new Contrast("left_over_sham", Map.of("left", 1.0, "sham", -1.0)));
+
   private static Trial trial(String name, double onset) {
     return new Trial(name, onset, 2, null, Map.of(), 2);
   }
@@ -65,12 +70,15 @@ class RegionFitsTest {
             DriftSettings.DEFAULT,
             true,
             List.of());
+    SessionDesign design = SessionDesign.build(request, kept, new double[] {0});
     return new RegionModel(
-        SessionDesign.build(request, kept, new double[] {0}),
+        LinearModel.of(
+            DesignBasis.of(design.ofPlane(0), kept), CONTRASTS, List.of(), NoiseSettings.DEFAULT),
+        design,
         request,
         PlaneOffsets.of(0),
         kept,
-        List.of(new Contrast("left_over_sham", Map.of("left", 1.0, "sham", -1.0))),
+        CONTRASTS,
         NoiseSettings.DEFAULT,
         InferenceSettings.DEFAULT);
   }
