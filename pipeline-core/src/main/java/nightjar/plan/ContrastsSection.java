@@ -4,6 +4,7 @@ import java.util.ArrayList;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
+import java.util.Optional;
 import nightjar.glm.Contrast;
 
 /** Plan section {@code contrasts}. */
@@ -39,14 +40,16 @@ final class ContrastsSection {
   private static Contrast contrast(Section s) {
     s.lacks("any_of", "F contrasts", List.of());
     s.lacks("all_of", "conjunctions", List.of());
-    String name =
-        s.text("name")
-            .orElseThrow(
-                () ->
-                    s.refusal("name", "a contrast has no name")
-                        .remedy("add name: with letters, digits, _ - ."));
-    Names.check(s, "name", name, "a contrast");
+    Optional<String> given = s.text("name");
     Section weights = s.section("weights");
+    // Before anything is missed, so that a mistyped key is what is told.
+    s.done();
+    String name =
+        given.orElseThrow(
+            () ->
+                s.refusal("name", "a contrast has no name")
+                    .remedy("add name: a_word, of letters, digits and _ - ."));
+    Names.check(s, "name", name, "a contrast");
     Map<String, Double> map = new LinkedHashMap<>();
     boolean any = false;
     for (String column : List.copyOf(weights.names())) {
@@ -58,7 +61,6 @@ final class ContrastsSection {
       throw s.refusal("weights", "the contrast " + name + " has no weight other than 0")
           .remedy("write weights: {stimulus: 1, other: -1}");
     }
-    s.done();
     return new Contrast(name, map);
   }
 }

@@ -3,6 +3,7 @@ package nightjar.plan;
 import java.util.ArrayList;
 import java.util.Collection;
 import java.util.LinkedHashMap;
+import java.util.LinkedHashSet;
 import java.util.List;
 import java.util.Map;
 import java.util.Set;
@@ -15,10 +16,15 @@ import nightjar.refusal.RefusedInput;
 
 /** Holds a plan against an event table. */
 public final class PlanCheck {
+  private static final String SLOPE = ":slope";
+
   /** Columns of the model that are no stimuli. */
   private static final String OTHER_COLUMNS =
       "slow_[0-9]+|segment_[0-9]+|level|((square|difference):)?(shift_depth|shift_lateral"
           + "|shift_plane|rotation|tilt_depth|tilt_lateral)";
+
+  /** Columns of design.csv that are none of the model. */
+  private static final String FRAME_COLUMNS = "frame|plane|time_s|kept";
 
   private PlanCheck() {}
 
@@ -32,11 +38,11 @@ public final class PlanCheck {
     Map<String, String> names = new LinkedHashMap<>();
     for (StimulusSettings s : plan.stimuli()) {
       if (events.of(s.loggedAs()).isEmpty()) {
-        throw RefusedInput.because("the stimulus " + s.name() + " has no trial")
+        throw RefusedInput.because("the stimulus " + Names.shown(s.name()) + " has no trial")
             .in(plan.fileName())
-            .at("stimuli." + s.name())
-            .found("no trial_type " + s.loggedAs() + " in " + events.fileName())
-            .expected("one of " + String.join(", ", events.stimuli()))
+            .at("stimuli." + Names.shown(s.name()))
+            .found("no trial_type " + Names.shown(s.loggedAs()) + " in " + events.fileName())
+            .expected("one of " + Names.listed(events.stimuli()))
             .remedy(suggestion(s.loggedAs(), events.stimuli(), "leave the entry out"));
       }
       if (!s.ignored()) {
@@ -79,8 +85,8 @@ public final class PlanCheck {
   }
 
   private static void refuseNameOfOtherColumn(String name, String logged, Plan plan) {
-    if (name.matches(OTHER_COLUMNS)) {
-      throw RefusedInput.because("a stimulus has the name of another column of the model")
+    if (name.matches(OTHER_COLUMNS + "|" + FRAME_COLUMNS)) {
+      throw RefusedInput.because("a stimulus has the name of another column of design.csv")
           .in(plan.fileName())
           .at("stimuli")
           .found(name)
@@ -89,21 +95,29 @@ public final class PlanCheck {
   }
 
   private static void check(Contrast contrast, Plan plan, Set<String> stimuli) {
+    Set<String> columns = new LinkedHashSet<>(stimuli);
+    if (plan.kernelDerivative()) {
+      stimuli.forEach(s -> columns.add(s + SLOPE));
+    }
     for (String column : contrast.weights().keySet()) {
-      String stimulus = column.split(":", 2)[0];
-      if (stimuli.contains(stimulus) || column.matches(OTHER_COLUMNS)) {
+      if (isOfStimulus(column, stimuli) || column.matches(OTHER_COLUMNS)) {
         continue;
       }
       throw RefusedInput.because("the contrast names an unknown stimulus")
           .in(plan.fileName())
           .at("contrast " + contrast.name())
           .found(Names.shown(column))
-          .expected("one of " + String.join(", ", stimuli))
-          .remedy(suggestion(column, stimuli, "name a stimulus of the event table"));
+          .expected("one of " + Names.listed(columns))
+          .remedy(suggestion(column, columns, "name a stimulus of the event table"));
     }
   }
 
+  private static boolean isOfStimulus(String column, Set<String> stimuli) {
+    return stimuli.contains(
+        column.endsWith(SLOPE) ? column.substring(0, column.length() - SLOPE.length()) : column);
+  }
+
   private static String suggestion(String name, Collection<String> known, String otherwise) {
-    return NearestName.of(name, known).map(n -> "did you mean " + n).orElse(otherwise);
+    return NearestName.of(name, known).map(n -> "did you mean " + Names.shown(n)).orElse(otherwise);
   }
 }

@@ -11,6 +11,27 @@ import nightjar.regions.RegionSource;
 /** Reads a plan; refuses what it does not know, in one sentence with line and column. */
 public final class PlanFile {
   private static final double LONGEST_SECONDS = 1e6;
+  private static final List<String> KEYS =
+      List.of(
+          "name",
+          "recording",
+          "screening",
+          "alignment",
+          "smoothing",
+          "mask",
+          "scale",
+          "kernel",
+          "stimuli",
+          "drift",
+          "nuisance",
+          "traces",
+          "noise",
+          "contrasts",
+          "inference",
+          "regions",
+          "responses",
+          "sham_check",
+          "verdict");
 
   private final String fileName;
   private final Section top;
@@ -31,6 +52,7 @@ public final class PlanFile {
   }
 
   private Plan plan() {
+    top.only(KEYS);
     Section recording = top.section("recording");
     Optional<String> variable = recording.text("variable");
     Double interval =
@@ -65,7 +87,6 @@ public final class PlanFile {
     Section sham = top.section("sham_check");
     sham.lacks("shams", "the sham check", List.of("0"));
     sham.done();
-    top.done();
     return plan;
   }
 

@@ -83,6 +83,7 @@ record PlanText(String fileName) {
       }
       throw RefusedInput.because("the plan holds no keys")
           .in(fileName)
+          .at(root.map(PlanText::place).orElse("line 1, column 1"))
           .remedy("give at least contrasts");
     } catch (MarkedYamlEngineException e) {
       Optional<Mark> mark = e.getProblemMark().or(e::getContextMark);

@@ -148,22 +148,18 @@ public final class ResolvedPlan {
     return m;
   }
 
-  /** Modelled ones in order, then the ignored ones. */
+  /** The plan's entries in its order, then the modelled ones that have none. */
   private static Map<String, Object> stimuli(Plan plan, List<String> names) {
     Map<String, Object> m = new LinkedHashMap<>();
-    for (String name : names) {
-      String logged =
-          plan.stimuli().stream()
-              .filter(s -> s.name().equals(name))
-              .map(StimulusSettings::loggedAs)
-              .findFirst()
-              .orElse(name);
-      m.put(name, map("logged_as", logged, "modulator", null));
+    for (StimulusSettings s : plan.stimuli()) {
+      m.put(s.name(), s.ignored() ? "ignore" : stimulus(s.loggedAs()));
     }
-    plan.stimuli().stream()
-        .filter(StimulusSettings::ignored)
-        .forEach(s -> m.put(s.name(), "ignore"));
+    names.forEach(name -> m.putIfAbsent(name, stimulus(name)));
     return m;
+  }
+
+  private static Map<String, Object> stimulus(String loggedAs) {
+    return map("logged_as", loggedAs, "modulator", null);
   }
 
   private static Map<String, Object> nuisance(NuisanceSettings n) {

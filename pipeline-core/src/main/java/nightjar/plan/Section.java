@@ -182,6 +182,12 @@ final class Section {
     }
   }
 
+  /** Refuses keys other than these, before any of them is read. */
+  void only(List<String> keysToCome) {
+    known.addAll(keysToCome);
+    done();
+  }
+
   /** Refuses keys that nobody asked for. */
   void done() {
     keys.forEach(

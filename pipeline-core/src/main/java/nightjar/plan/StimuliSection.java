@@ -19,7 +19,12 @@ final class StimuliSection {
       String other = logged.put(s.loggedAs(), name);
       if (other != null) {
         throw all.refusal(name, "two stimuli are logged as the same trial_type")
-            .found(other + " and " + name + " as " + Names.shown(s.loggedAs()))
+            .found(
+                Names.shown(other)
+                    + " and "
+                    + Names.shown(name)
+                    + " as "
+                    + Names.shown(s.loggedAs()))
             .remedy("give each its own logged_as");
       }
       stimuli.add(s);

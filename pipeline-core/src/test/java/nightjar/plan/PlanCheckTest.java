@@ -5,6 +5,7 @@ import static org.junit.jupiter.api.Assertions.assertThrows;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
 import java.util.List;
+import java.util.stream.IntStream;
 import nightjar.design.ModelledStimulus;
 import nightjar.recording.EventTable;
 import nightjar.refusal.RefusedInput;
@@ -78,6 +79,45 @@ class PlanCheckTest {
   }
 
   @Test
+  void aMistypedSlopeIsRefusedWithTheNearestColumn() {
+    String contrasts = "contrasts: [{name: c, weights: {'left_puff:slop': 1}}]\n";
+    EventTable events = Plans.events("left_puff");
+    assertEquals(
+        "p.yaml, contrast c: the contrast names an unknown stimulus (found left_puff:slop, expected"
+            + " one of left_puff, left_puff:slope); did you mean left_puff:slope.",
+        refusal(PlanFile.parse(contrasts + "kernel: {derivative: true}", "p.yaml"), events));
+    assertTrue(
+        refusal(PlanFile.parse(contrasts, "p.yaml"), events)
+            .contains("expected one of left_puff); "));
+  }
+
+  @Test
+  void endlessNamesAndListsAreCutInTheSentence() {
+    String endless = "x".repeat(100_000);
+    EventTable many =
+        Plans.events(IntStream.range(0, 500).mapToObj(i -> "s" + i).toArray(String[]::new));
+    for (String rest :
+        List.of(
+            "stimuli: {a: {logged_as: " + endless + "}}",
+            "stimuli: {? " + endless + " : ignore}")) {
+      String sentence = refusal(Plans.with(rest), many);
+      assertTrue(sentence.contains("has no trial"), sentence);
+      assertTrue(sentence.length() < 600, sentence);
+    }
+    String column = refusal(weighing("s0:" + "x".repeat(1000)), many);
+    assertTrue(column.length() < 600, column);
+  }
+
+  @Test
+  void whatWouldNotShowIsReplacedInTheSentence() {
+    String sentence =
+        refusal(Plans.with("stimuli: {\"q\\e[2J\\n\\u202E\\u2028\": ignore}"), Plans.events("a"));
+    assertTrue(
+        sentence.startsWith("p.yaml, stimuli.q?[2J???: the stimulus q?[2J??? has no trial"),
+        sentence);
+  }
+
+  @Test
   void aContrastWithAnIgnoredStimulusIsRefused() {
     assertTrue(
         refusal(Plans.with("stimuli: {b: ignore}"), Plans.events("a", "b"))
@@ -104,7 +144,22 @@ class PlanCheckTest {
   }
 
   @ParameterizedTest
-  @ValueSource(strings = {"x:slope", ":slope", "slow_", "slow_x", "square:level", "cube:rotation"})
+  @ValueSource(
+      strings = {
+        "x:slope",
+        ":slope",
+        "slow_",
+        "slow_x",
+        "square:level",
+        "cube:rotation",
+        "a:slop",
+        "a:foo",
+        "a:slope:slope",
+        "a:",
+        "frame",
+        "time_s",
+        "kept"
+      })
   void aWeightThatNamesNoColumnIsRefused(String column) {
     assertTrue(
         refusal(weighing(column), Plans.events("a"))
@@ -133,11 +188,12 @@ class PlanCheckTest {
   }
 
   @ParameterizedTest
-  @ValueSource(strings = {"level", "slow_1", "rotation", "segment_2"})
+  @ValueSource(
+      strings = {"level", "slow_1", "rotation", "segment_2", "frame", "plane", "time_s", "kept"})
   void aStimulusMayNotBeCalledLikeAnotherColumn(String logged) {
     String sentence = refusal(Plans.with(""), Plans.events("a", "b", logged));
     assertEquals(
-        "p.yaml, stimuli: a stimulus has the name of another column of the model (found "
+        "p.yaml, stimuli: a stimulus has the name of another column of design.csv (found "
             + logged
             + "); add a_name: {logged_as: "
             + logged

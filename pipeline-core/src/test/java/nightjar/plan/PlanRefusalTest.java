@@ -215,6 +215,66 @@ class PlanRefusalTest {
     assertOneSentence(sentence);
   }
 
+  @ParameterizedTest
+  @CsvSource(
+      delimiter = '|',
+      textBlock =
+          """
+          contrast: [{name: a, weights: {a: 1}}]   | line 1, column 1: the key is unknown (found contrast,  | contrasts
+          contrasts: [{nam: a, weights: {a: 1}}]   | line 1, column 14: the key is unknown (found contrasts[1].nam,  | name
+          contrasts: [{name: a, weight: {a: 1}}]   | line 1, column 23: the key is unknown (found contrasts[1].weight,  | weights
+          """)
+  void aMistypedKeyIsToldRatherThanMissed(String text, String part, String nearest) {
+    String sentence = Plans.refusalOf(text);
+    assertTrue(sentence.contains(part), sentence);
+    assertTrue(sentence.endsWith("; did you mean " + nearest + "."), sentence);
+  }
+
+  /** So that no key of the contract is known but not read. */
+  @ParameterizedTest
+  @ValueSource(
+      strings = {
+        "name",
+        "recording",
+        "screening",
+        "alignment",
+        "smoothing",
+        "mask",
+        "scale",
+        "kernel",
+        "stimuli",
+        "drift",
+        "nuisance",
+        "traces",
+        "noise",
+        "inference",
+        "regions",
+        "responses",
+        "sham_check",
+        "verdict",
+      })
+  void everySectionIsReadForItsValue(String key) {
+    String sentence = Plans.refusalWith(key + ": [1, [2]]");
+    assertTrue(
+        sentence.startsWith("p.yaml, line 2, column " + (key.length() + 3) + ": "), sentence);
+    assertFalse(sentence.contains("unknown"), sentence);
+  }
+
+  @Test
+  void anEndlessTrialTypeThatIsLoggedTwiceIsCutInTheSentence() {
+    String name = "x".repeat(100_000);
+    String sentence =
+        Plans.refusalWith("stimuli: {? " + name + " : ignore, b: {logged_as: " + name + "}}");
+    assertTrue(sentence.contains("two stimuli are logged as the same trial_type"), sentence);
+    assertTrue(sentence.length() < 600, sentence);
+  }
+
+  @Test
+  void aCharacterIsNotCutInHalf() {
+    String sentence = Plans.refusalWith("name: " + "x".repeat(63) + "\uD83D\uDC3E".repeat(9));
+    assertTrue(sentence.contains("(found " + "x".repeat(63) + "..., expected"), sentence);
+  }
+
   @Test
   void anEndlessNameIsCutInTheSentence() {
     String name = "x".repeat(100_000);

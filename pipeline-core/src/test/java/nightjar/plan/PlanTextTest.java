@@ -41,6 +41,7 @@ class PlanTextTest {
   @ValueSource(strings = {"", "# nothing\n", "contrasts", "- a\n- b\n", "---\n...\n", "~"})
   void aTextWithoutKeysIsRefused(String text) {
     String sentence = Plans.refusalOf(text);
+    assertTrue(sentence.startsWith("p.yaml, line "), sentence);
     assertTrue(sentence.contains("the plan holds no keys"), sentence);
   }
 

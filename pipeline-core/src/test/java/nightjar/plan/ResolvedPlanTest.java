@@ -40,8 +40,8 @@ class ResolvedPlanTest {
     assertEquals(
         List.of(
             new StimulusSettings("b", "B", false),
-            new StimulusSettings("a", "a", false),
-            new StimulusSettings("z", "z", true)),
+            new StimulusSettings("z", "z", true),
+            new StimulusSettings("a", "a", false)),
         PlanFile.parse(yaml, "p.yaml").stimuli());
   }
 
@@ -92,19 +92,21 @@ class ResolvedPlanTest {
     return t.toString();
   }
 
-  /**
-   * Some stimuli and a contrast of the first; ignored ones last, where the resolved plan has them.
-   */
+  /** Some stimuli, an ignored one anywhere among them, and a contrast of the first. */
   private static void stimuli(Random r, StringBuilder t) {
     List<String> names = new ArrayList<>(NAMES);
     java.util.Collections.shuffle(names, r);
     t.append("stimuli:\n");
-    for (int i = 0; i < 4; i++) {
+    int ignored = r.nextInt(5);
+    for (int i = 0; i < 5; i++) {
+      if (i == ignored) {
+        t.append("  'left out': ignore\n");
+        continue;
+      }
       t.append("  '").append(names.get(i)).append("': {logged_as: '");
       t.append(pick(r, List.of("x: y ", "# ", "' '' ", "ignore ", "é ")).replace("'", "''"));
       t.append(i).append("'}\n");
     }
-    t.append("  'left out': ignore\n");
     t.append("contrasts:\n- {name: '").append(names.get(5)).append("', weights: {'");
     t.append(names.get(0)).append("': ").append(number(r, 1e-5, 2)).append("}}\n");
   }
