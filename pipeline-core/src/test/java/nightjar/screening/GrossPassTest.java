@@ -6,6 +6,7 @@ import static org.junit.jupiter.api.Assertions.assertThrows;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
 import java.util.Arrays;
+import java.util.List;
 import java.util.Set;
 import nightjar.checks.Grids;
 import nightjar.numeric.Workers;
@@ -78,10 +79,13 @@ class GrossPassTest {
       }
     }
     GrossPass pass = over(film, 2);
-    assertEquals(12, pass.typicalFrames(12).size());
-    assertTrue(pass.typicalFrames(12).stream().allMatch(t -> t % 10 == 0));
-    assertTrue(pass.typicalFrames(24).stream().allMatch(t -> t % 10 <= 1));
-    assertEquals(FRAMES, pass.typicalFrames(10_000).size());
+    // 101 of the 120 frames are looked at, evenly spread: at least nine of each tenth.
+    assertTrue(pass.typicalFrames(9).stream().allMatch(t -> t % 10 == 0));
+    List<Integer> all = pass.typicalFrames(10_000);
+    assertEquals(101, all.size());
+    for (int i = 1; i < all.size(); i++) {
+      assertTrue(all.get(i - 1) % 10 <= all.get(i) % 10, "frame " + all.get(i));
+    }
     assertFalse(pass.typicalFrames(1).isEmpty());
   }
 
